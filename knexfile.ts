@@ -1,0 +1,3 @@
+import { knexConfig } from './db/config';
+
+export default knexConfig();
