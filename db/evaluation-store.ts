@@ -1,0 +1,126 @@
+import 'server-only';
+import type { Db } from './connection';
+import { fromRow, toRow } from './rows';
+
+export interface Evaluation {
+  id: number;
+  roundId: number;
+  version: number;
+  libraryVersion: string;
+  inputsSha256: string;
+  createdBy: number | null;
+  createdAt: string;
+}
+
+export interface EvaluatedMeasurand {
+  roundMeasurandId: number;
+  assignedValue: number | null;
+  assignedUncertainty: number | null;
+  sigmaPt: number | null;
+  scoreKind: string;
+  scoredCount: number;
+  bodyJson: string;
+}
+
+export interface ScoreRow {
+  roundMeasurandId: number;
+  enrolmentId: number;
+  value: number | null;
+  score: number | null;
+  signal: 'none' | 'warning' | 'action' | 'not-scored';
+}
+
+export interface SignOff {
+  id: number;
+  evaluationId: number;
+  userId: number;
+  userName: string;
+  decision: 'signed' | 'returned';
+  comment: string;
+  at: string;
+}
+
+const HEAD = [
+  'id',
+  'round_id',
+  'version',
+  'library_version',
+  'inputs_sha256',
+  'created_by',
+  'created_at',
+] as const;
+
+export async function findLatestEvaluation(connection: Db, roundId: number): Promise<Evaluation | null> {
+  const row = await connection('evaluations')
+    .where({ round_id: roundId })
+    .orderBy('version', 'desc')
+    .first(...HEAD);
+  return row ? fromRow<Evaluation>(row) : null;
+}
+
+export async function createEvaluation(
+  connection: Db,
+  evaluation: Omit<Evaluation, 'id'> & { settingsJson: string; inputsJson: string },
+): Promise<number> {
+  const [row] = await connection('evaluations').insert(toRow(evaluation)).returning('id');
+  return row.id;
+}
+
+export async function createEvaluatedMeasurands(
+  connection: Db,
+  evaluationId: number,
+  measurands: readonly EvaluatedMeasurand[],
+): Promise<void> {
+  await connection.batchInsert(
+    'evaluated_measurands',
+    measurands.map((entry) => ({ ...toRow(entry), evaluation_id: evaluationId })),
+    100,
+  );
+}
+
+export async function createScores(
+  connection: Db,
+  evaluationId: number,
+  scores: readonly ScoreRow[],
+): Promise<void> {
+  await connection.batchInsert(
+    'scores',
+    scores.map((entry) => ({ ...toRow(entry), evaluation_id: evaluationId })),
+    500,
+  );
+}
+
+export async function findEvaluatedMeasurand(
+  connection: Db,
+  evaluationId: number,
+  roundMeasurandId: number,
+): Promise<EvaluatedMeasurand | null> {
+  const row = await connection('evaluated_measurands')
+    .where({ evaluation_id: evaluationId, round_measurand_id: roundMeasurandId })
+    .first();
+  return row ? fromRow<EvaluatedMeasurand>(row) : null;
+}
+
+export async function listEvaluatedMeasurands(
+  connection: Db,
+  evaluationId: number,
+): Promise<EvaluatedMeasurand[]> {
+  const rows = await connection('evaluated_measurands').where({ evaluation_id: evaluationId }).orderBy('id');
+  return rows.map((row) => fromRow<EvaluatedMeasurand>(row));
+}
+
+export async function listSignOffs(connection: Db, evaluationId: number): Promise<SignOff[]> {
+  const rows = await connection('sign_offs')
+    .join('users', 'users.id', 'sign_offs.user_id')
+    .where({ evaluation_id: evaluationId })
+    .orderBy('sign_offs.id')
+    .select('sign_offs.*', 'users.name as user_name');
+  return rows.map((row) => fromRow<SignOff>(row));
+}
+
+export async function createSignOff(
+  connection: Db,
+  signOff: Pick<SignOff, 'evaluationId' | 'userId' | 'decision' | 'comment'>,
+): Promise<void> {
+  await connection('sign_offs').insert({ ...toRow(signOff), at: new Date().toISOString() });
+}

@@ -1,0 +1,16 @@
+import 'server-only';
+import { randomInt } from 'node:crypto';
+
+const LOWEST = 1_000;
+const HIGHEST = 9_999;
+
+/** A four-digit code that nobody in the round has, drawn at random so that it tells nothing of the laboratory. */
+export function drawParticipantCode(taken: ReadonlySet<string>): string {
+  if (taken.size > (HIGHEST - LOWEST) / 2) {
+    throw new Error(`a round of more than ${(HIGHEST - LOWEST) / 2} participants needs longer codes`);
+  }
+  for (;;) {
+    const code = String(randomInt(LOWEST, HIGHEST + 1));
+    if (!taken.has(code)) return code;
+  }
+}
