@@ -1,0 +1,55 @@
+import 'server-only';
+import type { Db } from './connection';
+
+export async function createSession(
+  connection: Db,
+  session: { id: string; userId: number; expiresAt: string },
+): Promise<void> {
+  await connection('sessions').insert({
+    id: session.id,
+    user_id: session.userId,
+    created_at: new Date().toISOString(),
+    expires_at: session.expiresAt,
+  });
+}
+
+export async function chooseLaboratory(
+  connection: Db,
+  sessionId: string,
+  laboratoryId: number,
+): Promise<void> {
+  await connection('sessions').where({ id: sessionId }).update({ laboratory_id: laboratoryId });
+}
+
+export async function endSession(connection: Db, sessionId: string): Promise<void> {
+  await connection('sessions')
+    .where({ id: sessionId })
+    .whereNull('ended_at')
+    .update({ ended_at: new Date().toISOString() });
+}
+
+/** Ends every session of a person, but one when `exceptId` is given; returns how many ended. */
+export async function endSessionsOfUser(
+  connection: Db,
+  userId: number,
+  options: { exceptId?: string } = {},
+): Promise<number> {
+  const query = connection('sessions').where({ user_id: userId }).whereNull('ended_at');
+  if (options.exceptId) query.whereNot({ id: options.exceptId });
+  return query.update({ ended_at: new Date().toISOString() });
+}
+
+export async function countOpenSessions(connection: Db, userId: number): Promise<number> {
+  const row = await connection('sessions')
+    .where({ user_id: userId })
+    .whereNull('ended_at')
+    .where('expires_at', '>', new Date().toISOString())
+    .count({ count: '*' })
+    .first();
+  return Number(row?.count ?? 0);
+}
+
+/** Removes sessions that expired before a moment; nothing refers to them. */
+export async function removeSessionsExpiredBefore(connection: Db, moment: string): Promise<void> {
+  await connection('sessions').where('expires_at', '<', moment).delete();
+}

@@ -1,0 +1,40 @@
+import 'server-only';
+import { headers } from 'next/headers';
+import { notFound, redirect } from 'next/navigation';
+import { isAppError } from '@/lib/errors';
+import type { Permission, Subject } from '@/lib/rules/permissions';
+import type { Actor } from '@/lib/rules/roles';
+import { authorise, type AuthoriseOptions } from './authorise';
+import { PATH_HEADER, signInAddress } from './local-path';
+import { currentActor, currentSession, type CurrentSession } from './session';
+
+/** The session, or a way to the sign-in page that leads back here. */
+export async function requireSession(): Promise<CurrentSession> {
+  const session = await currentSession();
+  if (!session) redirect(signInAddress((await headers()).get(PATH_HEADER)));
+  return session;
+}
+
+export async function requireActor(): Promise<Actor> {
+  return (await requireSession()).actor;
+}
+
+/** For server actions: throws an AppError that tells why; the refusal is in the log. */
+export async function requirePermission(
+  permission: Permission,
+  subject: Subject = {},
+  options: AuthoriseOptions = {},
+): Promise<Actor> {
+  return authorise(await currentActor(), permission, subject, options);
+}
+
+/** For pages: leads to the sign-in page, or answers 404, which tells nothing of what is there. */
+export async function requirePageActor(permission: Permission, subject: Subject = {}): Promise<Actor> {
+  const actor = await requireActor();
+  try {
+    return await authorise(actor, permission, subject);
+  } catch (error) {
+    if (isAppError(error)) notFound();
+    throw error;
+  }
+}
