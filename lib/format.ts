@@ -1,3 +1,9 @@
+import { formatStatistic } from './stats/display/format-statistic';
+import { displayScore } from './stats/scores/display-score';
+import type { ScoreKind } from './stats/scores/limits';
+
+export type { ScoreKind } from './stats/scores/limits';
+
 const MINUS = '\u2212';
 const ABSENT = '\u2013';
 const MONTHS = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'];
@@ -6,8 +12,7 @@ const DAY_MS = 86_400_000;
 /** The figure as text for files and the clipboard: ASCII minus, decimal point, '' when absent. */
 export function formatPlainNumber(value: number | null | undefined, decimals: number): string {
   if (value === null || value === undefined || !Number.isFinite(value)) return '';
-  const text = value.toFixed(decimals);
-  return /^-0(\.0*)?$/.test(text) ? text.slice(1) : text;
+  return formatStatistic(value, decimals);
 }
 
 /** The figure as shown on screen and paper: a true minus sign, decimal point, an en dash when absent. */
@@ -31,33 +36,14 @@ export function formatSignificant(value: number | null | undefined, digits: numb
   return showMinus(String(Number(value.toPrecision(digits))));
 }
 
-export type ScoreLimit = { at: number; inclusive: boolean };
-
-/** ISO 13528: |z| > 2 gives a warning signal, |z| >= 3 an action signal; the same for z' and zeta. */
-export const Z_LIMITS: readonly ScoreLimit[] = [
-  { at: 2, inclusive: false },
-  { at: 3, inclusive: true },
-];
-
-/** ISO 13528: |E_n| > 1 gives an action signal. */
-export const EN_LIMITS: readonly ScoreLimit[] = [{ at: 1, inclusive: false }];
-
-/** Decimals a score needs so that rounding does not move it across a limit: 2.998 is not shown as 3.00. */
-export function scoreDecimals(score: number, decimals = 2, limits: readonly ScoreLimit[] = Z_LIMITS): number {
-  const passed = (size: number) => limits.filter((l) => (l.inclusive ? size >= l.at : size > l.at)).length;
-  const wanted = passed(Math.abs(score));
-  let digits = decimals;
-  while (digits < decimals + 8 && passed(Math.abs(Number(score.toFixed(digits)))) !== wanted) digits += 1;
-  return digits;
+/** A score with two decimals, and more where two would show it on the other side of a limit. */
+export function formatScore(score: number | null | undefined, kind: ScoreKind = 'z'): string {
+  return showMinus(formatPlainScore(score, kind)) || ABSENT;
 }
 
-export function formatScore(
-  score: number | null | undefined,
-  decimals = 2,
-  limits: readonly ScoreLimit[] = Z_LIMITS,
-): string {
-  if (score === null || score === undefined || !Number.isFinite(score)) return ABSENT;
-  return formatNumber(score, scoreDecimals(score, decimals, limits));
+export function formatPlainScore(score: number | null | undefined, kind: ScoreKind = 'z'): string {
+  if (score === null || score === undefined || !Number.isFinite(score)) return '';
+  return displayScore(score, kind);
 }
 
 export function formatDate(iso: string | null | undefined): string {

@@ -1,13 +1,13 @@
-import { EN_LIMITS, formatScore, Z_LIMITS } from '@/lib/format';
+import { formatScore, type ScoreKind } from '@/lib/format';
+import type { Signal as StatsSignal } from '@/lib/stats/scores/limits';
 import { cx } from './cx';
 import { FilledSquare, OpenTriangle } from './shapes';
 
-export type SignalKind = 'none' | 'warning' | 'action' | 'not-scored';
+export type SignalKind = StatsSignal | 'not-scored';
 export type SignalProps = {
   score: number | null;
   signal: SignalKind;
-  decimals?: number;
-  limits?: 'z' | 'en';
+  kind?: ScoreKind;
   compact?: boolean;
   column?: boolean;
   why?: string;
@@ -18,12 +18,12 @@ export type SignalProps = {
  * `compact` keeps the word for screen readers and paper only; `column` reserves the room of the
  * signal, so that the figures of a column stay aligned.
  */
-export function Signal({ score, signal, decimals = 2, limits = 'z', compact, column, why }: SignalProps) {
+export function Signal({ score, signal, kind = 'z', compact, column, why }: SignalProps) {
   if (signal === 'not-scored' || score === null)
     return <NotScored compact={compact} column={column} why={why} />;
   return (
     <span className={cx('inline-flex items-baseline gap-1.5', TEXT[signal])}>
-      <span className="figures">{formatScore(score, decimals, limits === 'en' ? EN_LIMITS : Z_LIMITS)}</span>
+      <span className="figures">{formatScore(score, kind)}</span>
       <span className={cx('inline-flex items-baseline gap-1 text-left', column && slot(compact))}>
         <SignalMark signal={signal} compact={compact} />
       </span>

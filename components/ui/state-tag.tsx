@@ -1,7 +1,7 @@
+import type { RoundState } from '@/lib/rules/round-states';
 import { cx } from './cx';
 
-export type RoundStateName =
-  'draft' | 'open' | 'closed' | 'evaluated' | 'published' | 'reissued' | 'cancelled';
+export type RoundStateName = RoundState | 'reissued';
 export type EnrolmentStateName = 'invited' | 'enrolled' | 'declined' | 'withdrawn';
 export type SubmissionStateName = 'none' | 'draft' | 'submitted' | 'superseded';
 export type StateTagProps =
