@@ -1,0 +1,3 @@
+export * from './consensus-uncertainty';
+export * from './mean-uncertainty';
+export * from './negligible-uncertainty';

@@ -1,0 +1,3 @@
+export * from './evaluate-measurand';
+export * from './participant-working';
+export type * from './types';

@@ -1,0 +1,64 @@
+/** Compensated sum of the terms (Neumaier 1974): the rounding error of each addition is kept and added at the end. */
+export function compensatedSum(n: number, term: (index: number) => number): number {
+  let sum = 0;
+  let lost = 0;
+  for (let i = 0; i < n; i += 1) {
+    const x = term(i);
+    const next = sum + x;
+    lost += Math.abs(sum) >= Math.abs(x) ? sum - next + x : x - next + sum;
+    sum = next;
+  }
+  return sum + lost;
+}
+
+/** Largest absolute value. */
+export function largestMagnitude(values: ArrayLike<number>): number {
+  let largest = 0;
+  for (let i = 0; i < values.length; i += 1) {
+    const size = Math.abs(values[i] as number);
+    if (size > largest) largest = size;
+  }
+  return largest;
+}
+
+// Above 2^960 a sum of up to 2^53 values could overflow; 2^-64 takes it away and, as a power of two, loses no digit.
+const LARGE = 2 ** 960;
+const SHRINK = 2 ** -64;
+
+/** A power of two by which values can be multiplied so that neither their sum nor their differences overflow. */
+export function safeFactor(values: ArrayLike<number>): number {
+  return largestMagnitude(values) > LARGE ? SHRINK : 1;
+}
+
+/**
+ * Mean of the values times `factor`. The second pass adds the mean of what the first left over: equal values
+ * give exactly that value, and the result is right to the last digit or next to it.
+ */
+export function scaledMean(values: ArrayLike<number>, factor: number): number {
+  const n = values.length;
+  const first = compensatedSum(n, (i) => (values[i] as number) * factor) / n;
+  return first + compensatedSum(n, (i) => (values[i] as number) * factor - first) / n;
+}
+
+// Squares of numbers outside 2^+-480 leave the number range or lose digits; 2^+-600 brings them back inside.
+const SQUARE_LIMIT = 2 ** 480;
+const SQUARE_FACTOR = 2 ** 600;
+
+/** Standard deviation with divisor n - 1, in the unit of the values; Infinity when it cannot be represented. */
+export function sampleSd(values: ArrayLike<number>): number {
+  const n = values.length;
+  const shrink = safeFactor(values);
+  const centre = scaledMean(values, shrink);
+  let largest = 0;
+  for (let i = 0; i < n; i += 1)
+    largest = Math.max(largest, Math.abs((values[i] as number) * shrink - centre));
+  if (largest === 0) return 0;
+  let unit = 1;
+  if (largest > SQUARE_LIMIT) unit = 1 / SQUARE_FACTOR;
+  else if (largest < 1 / SQUARE_LIMIT) unit = SQUARE_FACTOR;
+  const deviation = (i: number) => ((values[i] as number) * shrink - centre) * unit;
+  const squares = compensatedSum(n, (i) => deviation(i) ** 2);
+  // The centre is a rounded number; what it misses is taken off again (Chan, Golub and LeVeque 1983).
+  const rest = compensatedSum(n, deviation);
+  return Math.sqrt(Math.max(0, squares - (rest * rest) / n) / (n - 1)) / unit / shrink;
+}

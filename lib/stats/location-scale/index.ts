@@ -1,0 +1,10 @@
+export { algorithmA } from './algorithm-a';
+export type { AlgorithmAIteration, AlgorithmAOptions, AlgorithmAResult } from './algorithm-a';
+export type { AlgorithmATolerance } from './algorithm-a-iteration';
+export type { StartScaleSource } from './algorithm-a-start';
+export * from './mad-e';
+export * from './mean';
+export * from './median';
+export { NIQR_FACTOR, nIqr, type NIqrOptions } from './n-iqr';
+export * from './quantile';
+export * from './sd';
