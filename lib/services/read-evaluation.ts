@@ -1,0 +1,67 @@
+import 'server-only';
+import { db, type Db } from '@/db/connection';
+import { findEnrolment } from '@/db/enrolment-store';
+import {
+  findLatestEvaluation,
+  listEvaluatedMeasurands,
+  listSignOffs,
+  type Evaluation,
+  type SignOff,
+} from '@/db/evaluation-store';
+import { listRoundMeasurands, type RoundMeasurand } from '@/db/round-measurand-store';
+import { findRound, type Round } from '@/db/round-store';
+import { notFound } from '@/lib/errors';
+import { can } from '@/lib/rules/permissions';
+import { laboratoriesOf, type Actor } from '@/lib/rules/roles';
+import type { MeasurandEvaluation } from '@/lib/stats';
+
+export interface EvaluatedPlan {
+  plan: RoundMeasurand;
+  evaluation: MeasurandEvaluation;
+}
+
+export interface RoundEvaluation {
+  round: Round;
+  evaluation: Evaluation;
+  signOffs: SignOff[];
+  measurands: EvaluatedPlan[];
+}
+
+/** The newest evaluation of a round with every measurand, or null before the first. */
+export async function findRoundEvaluation(connection: Db, round: Round): Promise<RoundEvaluation | null> {
+  const evaluation = await findLatestEvaluation(connection, round.id);
+  if (!evaluation) return null;
+  const plans = await listRoundMeasurands(connection, round.id);
+  const bodies = new Map(
+    (await listEvaluatedMeasurands(connection, evaluation.id)).map((entry) => [
+      entry.roundMeasurandId,
+      entry.bodyJson,
+    ]),
+  );
+  const measurands = plans.flatMap((plan) => {
+    const body = bodies.get(plan.id);
+    return body === undefined ? [] : [{ plan, evaluation: JSON.parse(body) as MeasurandEvaluation }];
+  });
+  return { round, evaluation, signOffs: await listSignOffs(connection, evaluation.id), measurands };
+}
+
+export interface VisibleEvaluation extends RoundEvaluation {
+  /** Codes of the asking person's own laboratories in this round. */
+  ownCodes: string[];
+}
+
+/** The evaluation as far as it may be shown to whoever asks: staff always, a participant once it is published. */
+export async function getVisibleEvaluation(actor: Actor, slug: string): Promise<VisibleEvaluation> {
+  const round = await findRound(db(), slug);
+  if (!round) throw notFound('The evaluation');
+  const ownCodes: string[] = [];
+  for (const laboratory of laboratoriesOf(actor)) {
+    const enrolment = await findEnrolment(db(), round.id, laboratory.id);
+    if (enrolment?.state === 'enrolled') ownCodes.push(enrolment.participantCode);
+  }
+  const isParticipantAfterwards = round.state === 'published' && ownCodes.length > 0;
+  if (!can(actor, 'round:see-results') && !isParticipantAfterwards) throw notFound('The evaluation');
+  const found = await findRoundEvaluation(db(), round);
+  if (!found) throw notFound('The evaluation');
+  return { ...found, ownCodes };
+}
