@@ -1,0 +1,238 @@
+import Link from 'next/link';
+import type { ReactNode } from 'react';
+import { layOutRoundLine, type RoundLineLayout } from '@/components/charts/round-line-geometry';
+import { cx } from '@/components/ui/cx';
+import { OpenTriangle } from '@/components/ui/shapes';
+import { daysBetween, formatDate, formatRelativeDays } from '@/lib/format';
+import { StageMark } from '@/components/ui/stage-mark';
+
+export type StageState = 'done' | 'current' | 'due' | 'overdue' | 'later' | 'cancelled';
+export type StageBlocker = string | { text: string; href: string };
+export type RoundStage = {
+  key: string;
+  label: string;
+  href: string | null;
+  at: string | null;
+  state: StageState;
+  blockedBy?: readonly StageBlocker[];
+};
+export type RoundLineProps = { stages: readonly RoundStage[]; today: string; currentPlace: string };
+
+/** The stages of a round on one line in time. It is the way around a round and stands on each of its pages. */
+export function RoundLine({ stages, today, currentPlace }: RoundLineProps) {
+  const layout = layOutRoundLine(
+    stages.map((stage) => stage.at),
+    today,
+  );
+  return (
+    <nav aria-label="Stages of the round" className="border-y py-3">
+      <WideLine stages={stages} today={today} currentPlace={currentPlace} layout={layout} />
+      <NarrowLine stages={stages} today={today} currentPlace={currentPlace} />
+      <Blockers stages={stages} />
+    </nav>
+  );
+}
+
+function WideLine({ stages, today, currentPlace, layout }: RoundLineProps & { layout: RoundLineLayout }) {
+  const columns = layout.weights.map((weight) => `minmax(5.5rem, ${weight.toFixed(3)}fr)`).join(' ');
+  return (
+    <ol className="hidden pt-5 md:grid print:grid" style={{ gridTemplateColumns: columns }}>
+      {stages.map((stage, index) => (
+        <li key={stage.key} className="relative min-w-0">
+          <Stretch index={index} last={index === stages.length - 1} layout={layout} today={today} />
+          <StageLink stage={stage} here={stage.key === currentPlace} className="group relative block pr-2">
+            <StageMark state={stage.state} className="block bg-paper" />
+            <StageText stage={stage} today={today} here={stage.key === currentPlace} />
+          </StageLink>
+        </li>
+      ))}
+    </ol>
+  );
+}
+
+/** The line from one stage to the next: heavy as far as today, a hairline after it. */
+function Stretch({
+  index,
+  last,
+  layout,
+  today,
+}: {
+  index: number;
+  last: boolean;
+  layout: RoundLineLayout;
+  today: string;
+}) {
+  const at = layout.today;
+  const passed = !at || index > at.stage ? 0 : index < at.stage ? 1 : at.fraction;
+  const isHere = at?.stage === index;
+  return (
+    <span aria-hidden={!isHere} className="absolute inset-x-0 top-2">
+      {!last && <span className="absolute inset-x-0 h-px bg-rule-strong" />}
+      {!last && (
+        <span className="absolute left-0 -top-px h-0.75 bg-ink" style={{ width: `${passed * 100}%` }} />
+      )}
+      {isHere && (
+        <span
+          className="absolute -top-6 h-9 border-l border-ink"
+          style={{ left: `${Math.min(at.fraction, 0.98) * 100}%` }}
+        >
+          <span
+            className={cx(
+              'absolute -top-0.5 bg-paper text-xs leading-4 whitespace-nowrap',
+              at.fraction > 0.6 && last ? 'right-1' : 'left-1',
+            )}
+          >
+            today, {formatDate(today)}
+          </span>
+        </span>
+      )}
+    </span>
+  );
+}
+
+function NarrowLine({ stages, today, currentPlace }: RoundLineProps) {
+  const here = stages.find((stage) => stage.key === currentPlace);
+  return (
+    // A new key for each place closes the list once a stage has been chosen.
+    <details key={currentPlace} className="md:hidden print:hidden">
+      <summary className="flex min-h-11 items-center gap-3">
+        <span aria-hidden="true" className="relative flex gap-2.5">
+          <span className="absolute inset-x-0 top-1/2 h-px bg-rule-strong" />
+          {stages.map((stage) => (
+            <StageMark
+              key={stage.key}
+              state={stage.state}
+              className={cx(
+                'relative bg-paper',
+                stage.key === currentPlace && 'shadow-[0_5px_0_-1px_var(--maize)]',
+              )}
+            />
+          ))}
+        </span>
+        <span className="font-semibold">{here?.label ?? 'Stages'}</span>
+        <span className="sr-only">, show all stages of the round</span>
+      </summary>
+      <ol className="mt-2 border-t">
+        {stages.map((stage) => (
+          <li key={stage.key} className="border-b">
+            <StageLink
+              stage={stage}
+              here={stage.key === currentPlace}
+              className="flex min-h-11 items-center gap-3 py-1"
+            >
+              <StageMark state={stage.state} />
+              <StageText stage={stage} today={today} here={stage.key === currentPlace} inRow />
+            </StageLink>
+          </li>
+        ))}
+      </ol>
+    </details>
+  );
+}
+
+type StageLinkProps = { stage: RoundStage; here: boolean; className: string; children: ReactNode };
+
+function StageLink({ stage, here, className, children }: StageLinkProps) {
+  if (!stage.href) {
+    return (
+      <span aria-current={here ? 'page' : undefined} className={className}>
+        {children}
+      </span>
+    );
+  }
+  return (
+    <Link href={stage.href} aria-current={here ? 'page' : undefined} className={className}>
+      {children}
+    </Link>
+  );
+}
+
+function StageText({
+  stage,
+  today,
+  here,
+  inRow,
+}: {
+  stage: RoundStage;
+  today: string;
+  here: boolean;
+  inRow?: boolean;
+}) {
+  return (
+    <span
+      className={cx(
+        inRow ? 'flex flex-1 items-baseline justify-between gap-x-3' : 'mt-1.5 block leading-tight',
+      )}
+    >
+      <span
+        className={cx(
+          'inline-block border-b-3',
+          here ? 'border-maize font-semibold text-ink' : 'border-transparent',
+          !here && (stage.href ? 'text-press group-hover:border-rule' : 'text-ink-faint'),
+          stage.state === 'cancelled' && 'line-through',
+        )}
+      >
+        {stage.label}
+      </span>
+      <span className={cx('text-sm text-ink-soft', inRow ? 'text-right' : 'block')}>
+        <StageWords stage={stage} today={today} />
+      </span>
+    </span>
+  );
+}
+
+function StageWords({ stage, today }: { stage: RoundStage; today: string }) {
+  const date = stage.at ? formatDate(stage.at) : '';
+  switch (stage.state) {
+    case 'done':
+      return <>{date ? `done ${date}` : 'done'}</>;
+    case 'current':
+      return <strong className="text-ink">{date ? `now; ${date}` : 'now'}</strong>;
+    case 'due':
+      return (
+        <span className="text-ink">{stage.at ? `due ${formatRelativeDays(stage.at, today)}` : 'due'}</span>
+      );
+    case 'overdue':
+      return <strong className="text-warning">{overdueWords(stage.at, today)}</strong>;
+    case 'cancelled':
+      return <>cancelled</>;
+    case 'later':
+      return <>{date || 'later'}</>;
+  }
+}
+
+function overdueWords(at: string | null, today: string): string {
+  const days = at ? -daysBetween(today, at) : 0;
+  if (days < 1) return 'overdue';
+  return `overdue by ${days === 1 ? 'a day' : `${days} days`}`;
+}
+
+function Blockers({ stages }: Pick<RoundLineProps, 'stages'>) {
+  const blocked = stages.filter((stage) => stage.blockedBy && stage.blockedBy.length > 0);
+  if (blocked.length === 0) return null;
+  return (
+    <div className="no-print mt-3 flex flex-col gap-1.5 text-sm">
+      {blocked.map((stage) => (
+        <div key={stage.key} className="flex flex-wrap items-baseline gap-x-2">
+          <span className="inline-flex items-baseline gap-1.5 font-semibold text-warning">
+            <OpenTriangle />
+            {stage.label} is held up
+          </span>
+          <ul className="flex flex-col">
+            {stage.blockedBy?.map((blocker, index) => (
+              <li key={index}>
+                {typeof blocker === 'string' ? (
+                  blocker
+                ) : (
+                  <Link href={blocker.href} className="text-link inline-flex min-h-6 items-center">
+                    {blocker.text}
+                  </Link>
+                )}
+              </li>
+            ))}
+          </ul>
+        </div>
+      ))}
+    </div>
+  );
+}
