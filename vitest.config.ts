@@ -5,7 +5,7 @@ import { defineConfig } from 'vitest/config';
 const root = import.meta.dirname;
 const alias = { '@': root, 'server-only': path.join(root, 'tests/empty-module.ts') };
 const shared = { plugins: [react()], resolve: { alias } };
-const env = { TZ: 'UTC', NODE_ENV: 'test' };
+const env = { TZ: 'UTC', NODE_ENV: 'test' as const };
 
 export default defineConfig({
   test: {
@@ -15,7 +15,9 @@ export default defineConfig({
         test: {
           name: 'unit',
           env,
-          include: ['tests/{stats,reference,rules,results-file,db,services,components,layers,demo}/**/*.test.{ts,tsx}'],
+          include: [
+            'tests/{stats,reference,rules,results-file,db,services,components,layers,demo}/**/*.test.{ts,tsx}',
+          ],
           setupFiles: ['tests/setup-node.ts'],
           execArgv: ['--import', 'tsx'],
         },

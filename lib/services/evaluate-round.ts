@@ -62,7 +62,7 @@ function scoresOf({ plan, evaluation }: Evaluated, enrolmentIds: ReadonlyMap<str
     enrolmentId: enrolmentOf(entry.participant),
     value: entry.value,
     score: entry.score,
-    signal: entry.score === null ? ('not-scored' as const) : entry.signal,
+    signal: entry.score === null || entry.signal === null ? ('not-scored' as const) : entry.signal,
   }));
   const censored = evaluation.censored.map((entry) => ({
     roundMeasurandId: plan.id,

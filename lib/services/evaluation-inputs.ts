@@ -2,10 +2,13 @@ import 'server-only';
 import { createHash } from 'node:crypto';
 import type { RoundMeasurand } from '@/db/round-measurand-store';
 import type { RoundResult } from '@/db/views/round-results-view';
-import { mean, type EvaluateMeasurandInput } from '@/lib/stats';
+import { mean, type CensoredResult, type EvaluateMeasurandInput, type MeasurandResult } from '@/lib/stats';
 import { massFractionPerUnit } from '@/lib/units';
 
-type Figures = Pick<EvaluateMeasurandInput, 'results' | 'censored'>;
+interface Figures {
+  results: MeasurandResult[];
+  censored: CensoredResult[];
+}
 
 function groupByCode(results: readonly RoundResult[]): Map<string, RoundResult[]> {
   const groups = new Map<string, RoundResult[]>();

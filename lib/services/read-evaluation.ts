@@ -11,8 +11,8 @@ import {
 import { listRoundMeasurands, type RoundMeasurand } from '@/db/round-measurand-store';
 import { findRound, type Round } from '@/db/round-store';
 import { notFound } from '@/lib/errors';
-import { can } from '@/lib/rules/permissions';
-import { laboratoriesOf, type Actor } from '@/lib/rules/roles';
+import { can, laboratoriesOf } from '@/lib/rules/permissions';
+import type { Actor } from '@/lib/rules/roles';
 import type { MeasurandEvaluation } from '@/lib/stats';
 
 export interface EvaluatedPlan {

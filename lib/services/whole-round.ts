@@ -2,7 +2,7 @@ import 'server-only';
 import { addAuditEntry } from '@/db/audit-store';
 import { db, type Db } from '@/db/connection';
 import { createEnrolment, listEnrolments, updateEnrolment, type Enrolment } from '@/db/enrolment-store';
-import { createLaboratory, listLaboratoryNames } from '@/db/laboratory-store';
+import { createLaboratory, listLaboratories, type LaboratoryFields } from '@/db/laboratory-store';
 import { findRound, type Round } from '@/db/round-store';
 import { inTransaction } from '@/db/transaction';
 import { AppError, notFound } from '@/lib/errors';
@@ -35,7 +35,7 @@ async function requireOpenRound(connection: Db, slug: string): Promise<Round> {
 /** Reads a file with one row for each laboratory and result; nothing is stored. */
 export async function checkWholeRoundFile(slug: string, file: UploadedFile): Promise<WholeRoundLoad> {
   const round = await requireOpenRound(db(), slug);
-  const plan = await getResultsPlan(db(), round, await listLaboratoryNames(db()));
+  const plan = await getResultsPlan(db(), round, await listLaboratories(db()));
   const today = new Date().toISOString().slice(0, 10);
   const report = readResultsFile(file.bytes, plan, { kind: 'whole-round', today });
   const laboratoryCount = groupByLaboratory(report.results).size;
@@ -69,7 +69,7 @@ export async function loadWholeRound(
     const taken = new Set(enrolments.map((enrolment) => enrolment.participantCode));
     for (const rows of groupByLaboratory(checked.report.results).values()) {
       const laboratoryId =
-        rows[0]?.laboratoryId ?? (await createLaboratory(trx, { name: rows[0]?.laboratory ?? '' }));
+        rows[0]?.laboratoryId ?? (await createLaboratory(trx, newLaboratory(rows[0]?.laboratory ?? '')));
       const enrolmentId = await ensureEnrolled(
         trx,
         round,
@@ -88,6 +88,10 @@ export async function loadWholeRound(
     });
   });
   return checked;
+}
+
+function newLaboratory(name: string): LaboratoryFields {
+  return { name, kind: 'other', town: '', contactEmail: null, isActive: true };
 }
 
 async function ensureEnrolled(
