@@ -18,7 +18,11 @@ function toLaboratory(row: Row): Laboratory {
   return fromRow<Laboratory>(row, ['isActive']);
 }
 
-export async function createLaboratory(connection: Db, fields: LaboratoryFields): Promise<number> {
+/** Whatever but the name is left out keeps the table's default. */
+export async function createLaboratory(
+  connection: Db,
+  fields: Pick<LaboratoryFields, 'name'> & Partial<LaboratoryFields>,
+): Promise<number> {
   const [id] = await connection('laboratories').insert({
     ...toRow(fields),
     created_at: new Date().toISOString(),
@@ -50,4 +54,9 @@ export async function findLaboratoryByName(connection: Db, name: string): Promis
 export async function listLaboratories(connection: Db): Promise<Laboratory[]> {
   const rows: Row[] = await connection('laboratories').orderByRaw('lower(name)').select();
   return rows.map(toLaboratory);
+}
+
+/** Every laboratory's id and name, for recognising names in a file. */
+export async function listLaboratoryNames(connection: Db): Promise<{ id: number; name: string }[]> {
+  return connection('laboratories').orderBy('id').select('id', 'name');
 }

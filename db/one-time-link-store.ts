@@ -37,7 +37,7 @@ export async function findOpenLink(
 }
 
 /** Takes a link: true for the one caller who comes first. */
-export async function useLink(connection: Db, id: number): Promise<boolean> {
+export async function takeLink(connection: Db, id: number): Promise<boolean> {
   const taken = await connection('one_time_links')
     .where({ id })
     .whereNull('used_at')
