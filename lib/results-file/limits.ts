@@ -6,6 +6,8 @@ export const MAX_ROWS = 100_000;
 export const MAX_CELL = 2_000;
 /** Characters in one physical line: far more than the named columns can fill, far less than would fill the memory. */
 export const MAX_LINE = 200_000;
+/** Physical lines up to the last one with content: quoted line breaks and empty rows among them. */
+export const MAX_LINES = 500_000;
 /** Characters in a comment. */
 export const MAX_COMMENT = 500;
 /** Problems that are listed; the rest is counted. */

@@ -45,7 +45,7 @@ export type CheckedResult = {
   /** YYYY-MM-DD. */
   analysedOn: string | null;
   comment: string | null;
-  /** Whole round only: the laboratory as written and the provider's id for it; id null for a new one. */
+  /** Whole round only: the name as the provider has it, or as first written for a new one, whose id is null. */
   laboratory: string | null;
   laboratoryId: number | null;
 };
@@ -77,6 +77,9 @@ export type ReadFile = CheckedFile & {
   /** Null when the bytes are not text. */
   encoding: TextEncodingName | null;
 };
+
+/** What readResultsFile needs to know besides the plan. */
+export type ReadOptions = CheckOptions & { kind: FileKind };
 
 export type CheckOptions = {
   /** Today as YYYY-MM-DD; no analysis is dated after it. */
