@@ -1,6 +1,7 @@
 import { lowerBound, upperBound } from '../internal/sorted';
 import type { AlgorithmAIteration } from './algorithm-a';
 import type { AlgorithmAStart } from './algorithm-a-start';
+import { WINSOR_MULTIPLE, WINSOR_SCALE_FACTOR } from './winsorise';
 
 export type AlgorithmATolerance = number | 'third-digit';
 
@@ -18,10 +19,6 @@ interface IterationEnd {
   readonly zeroScale: boolean;
   readonly trace: readonly AlgorithmAIteration[] | null;
 }
-
-/** Where winsorising begins, as a multiple of s*, and the factor that makes up for it, as the standard prints it. */
-const WINSOR_MULTIPLE = 1.5;
-const SCALE_FACTOR = 1.134;
 
 /** s* this far below its start, with nothing but ties inside the limits, is on its way to zero. */
 const COLLAPSE = 1e-12;
@@ -58,6 +55,7 @@ export function iterateAlgorithmA(
   const trace: AlgorithmAIteration[] | null = settings.trace ? [] : null;
   const first = start.scale * unit;
   let state: State = { location: 0, scale: first };
+  let lastChange = NaN;
   for (let iteration = 1; iteration <= settings.maxIterations; iteration += 1) {
     const next = winsorise(data, state);
     trace?.push(traceRow(iteration, toData(state), toData(next), next));
@@ -65,9 +63,13 @@ export function iterateAlgorithmA(
       const location = tiedValue(sorted, data, state);
       return { location, scale: 0, iterations: iteration, converged: true, zeroScale: true, trace };
     }
-    if (settled(state, next, toData, settings.tolerance)) {
-      return { ...toData(next), iterations: iteration, converged: true, zeroScale: false, trace };
-    }
+    const change = Math.max(Math.abs(next.location - state.location), Math.abs(next.scale - state.scale));
+    const settled =
+      settings.tolerance === 'third-digit'
+        ? sameThirdDigit(toData(state), toData(next))
+        : closeEnough(change, lastChange, settings.tolerance * next.scale);
+    if (settled) return { ...toData(next), iterations: iteration, converged: true, zeroScale: false, trace };
+    lastChange = change;
     state = next;
   }
   return { ...toData(state), iterations: settings.maxIterations, converged: false, zeroScale: false, trace };
@@ -137,7 +139,7 @@ function winsorise(data: Centred, { location, scale }: State): Step {
   const tied = high > low && z[low] === z[high - 1];
   return {
     location: mean,
-    scale: SCALE_FACTOR * Math.sqrt(Math.max(0, total) / (n - 1)),
+    scale: WINSOR_SCALE_FACTOR * Math.sqrt(Math.max(0, total) / (n - 1)),
     below: low,
     above,
     tied,
@@ -148,35 +150,31 @@ function tiedValue(sorted: Float64Array, data: Centred, { location, scale }: Sta
   return sorted[lowerBound(data.z, location - WINSOR_MULTIPLE * scale)] as number;
 }
 
-function settled(
-  before: State,
-  after: State,
-  toData: (state: State) => State,
-  tolerance: AlgorithmATolerance,
-): boolean {
-  if (tolerance !== 'third-digit') {
-    const limit = tolerance * after.scale;
-    return (
-      Math.abs(after.location - before.location) <= limit && Math.abs(after.scale - before.scale) <= limit
-    );
-  }
-  const [a, b] = [toData(before), toData(after)];
-  const place = Math.floor(Math.log10(b.scale)) - 2;
+/**
+ * The change is below the limit, and so is the sum of those still to come. With few results or many ties each change
+ * can be 0.9 of the one before; ten times the last change would then be missing if one looked at it alone.
+ */
+function closeEnough(change: number, lastChange: number, limit: number): boolean {
+  if (change > limit) return false;
+  if (change <= limit / 1000) return true;
+  const rate = change / lastChange;
+  return rate < 1 && (change * rate) / (1 - rate) <= limit;
+}
+
+/** The standard's own rule: the third significant figure of s*, and that decimal place of x*, stand still. */
+function sameThirdDigit(before: State, after: State): boolean {
+  const place = Math.floor(Math.log10(after.scale)) - 2;
   return (
-    roundedAt(a.scale, place) === roundedAt(b.scale, place) &&
-    roundedAt(a.location, place) === roundedAt(b.location, place)
+    roundedAt(before.scale, place) === roundedAt(after.scale, place) &&
+    roundedAt(before.location, place) === roundedAt(after.location, place)
   );
 }
 
 /** The number rounded to the decimal place 10^place, as a count of that unit. */
 function roundedAt(value: number, place: number): number {
-  return Math.round(
-    place >= 0
-      ? value / 10 ** place
-      : place < -300
-        ? value * 1e300 * 10 ** (-place - 300)
-        : value * 10 ** -place,
-  );
+  if (place >= 0) return Math.round(value / 10 ** place);
+  // 10 ** 308 is the largest power of ten, so a subnormal value is taken there in two steps.
+  return Math.round(value * 10 ** Math.min(300, -place) * 10 ** Math.max(0, -place - 300));
 }
 
 function traceRow(iteration: number, from: State, to: State, step: Step): AlgorithmAIteration {

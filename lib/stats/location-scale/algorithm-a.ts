@@ -52,8 +52,8 @@ const DEFAULT_MAX_ITERATIONS = 10_000;
  * equal) s* starts from nIQR, then from the mean absolute deviation about the median, and the result says which.
  *
  * @param values - the results. Shape: n values. Unit: unit of the data. Domain: finite; at least 2.
- * @param options.tolerance - stop when x* and s* change by less than this share of s*. Default 1e-9. 'third-digit'
- *   is the rule of the standard: no change in the third significant figure of s* and in that place of x*.
+ * @param options.tolerance - stop when x* and s* change by less than this share of s*, and by the rate of the
+ *   changes less is still to come. Default 1e-9. 'third-digit' is the rule of the standard: no change in the third significant figure of s* and in that place of x*.
  * @param options.maxIterations - limit. Default 10,000 (ordinary data take 10 to 60).
  * @param options.working - keep each iteration in `trace`. Default false.
  * @returns { location, scale, count, iterations, converged, startLocation, startScale, startScaleFrom, zeroScale,

@@ -8,3 +8,7 @@ export * from './median';
 export { NIQR_FACTOR, nIqr, type NIqrOptions } from './n-iqr';
 export * from './quantile';
 export * from './sd';
+export * from './kernel-bandwidth';
+export * from './kernel-density';
+export * from './modes';
+export * from './winsorise';
