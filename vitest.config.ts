@@ -5,6 +5,8 @@ import { defineConfig } from 'vitest/config';
 const root = import.meta.dirname;
 const alias = { '@': root, 'server-only': path.join(root, 'tests/empty-module.ts') };
 const shared = { plugins: [react()], resolve: { alias } };
+/** Tests that talk to the running server; beside their fixtures they are called *.server.test.ts. */
+const NEEDS_SERVER = ['tests/{server,e2e}/**/*.test.ts', 'tests/**/*.server.test.ts'];
 const env = { TZ: 'UTC', NODE_ENV: 'test' as const };
 
 export default defineConfig({
@@ -15,9 +17,8 @@ export default defineConfig({
         test: {
           name: 'unit',
           env,
-          include: [
-            'tests/{stats,reference,rules,results-file,db,services,components,layers,demo}/**/*.test.{ts,tsx}',
-          ],
+          include: ['tests/**/*.test.{ts,tsx}'],
+          exclude: NEEDS_SERVER.concat('tests/slow/**'),
           setupFiles: ['tests/setup-node.ts'],
           execArgv: ['--import', 'tsx'],
         },
@@ -27,7 +28,7 @@ export default defineConfig({
         test: {
           name: 'server',
           env,
-          include: ['tests/{server,e2e}/**/*.test.ts'],
+          include: NEEDS_SERVER,
           globalSetup: ['tests/server-setup.ts'],
           fileParallelism: false,
           testTimeout: 120_000,

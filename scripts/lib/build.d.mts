@@ -1,0 +1,2 @@
+export function buildWhenStale(): Promise<void>;
+export function isBuildStale(): boolean;
