@@ -1,6 +1,8 @@
+import { COLUMNS } from './columns';
 import { decideDecimalMark } from './decimal-mark';
 import { indexPlan } from './plan-index';
 import type { ResultsPlan } from './plan';
+import type { Problem } from './problem';
 import { RowChecker } from './row-checker';
 import { Roll } from './roll';
 import type { CheckedFile, CheckedResult, CheckOptions, DecimalMark, FileKind } from './result-types';
@@ -37,6 +39,7 @@ function checkTable(
       if (findings.problemCount === 0) roll.notice(findings);
     }
   }
+  inReadingOrder(findings.problems);
   return {
     ok: findings.problemCount === 0,
     results,
@@ -50,4 +53,10 @@ function checkTable(
     ignoredColumns: [...table.ignoredColumns],
     newLaboratories: roll.newLaboratories,
   };
+}
+
+/** By line, and within a line from the first column to the last. */
+function inReadingOrder(problems: Problem[]): void {
+  const place = (column: string | null) => (COLUMNS as readonly (string | null)[]).indexOf(column);
+  problems.sort((a, b) => (a.line ?? 0) - (b.line ?? 0) || place(a.column) - place(b.column));
 }

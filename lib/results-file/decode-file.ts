@@ -2,6 +2,7 @@ import { nameBinaryFile, nameOtherText, startsWith } from './file-kind';
 import { MAX_BYTES } from './limits';
 import { makeProblem, type Problem } from './problem';
 import type { TextEncodingName } from './result-types';
+import { countLineFeeds } from './scan-lines';
 
 export type DecodedFile =
   { ok: true; text: string; encoding: TextEncodingName } | { ok: false; problem: Problem };
@@ -66,11 +67,11 @@ function refuseText(text: string): Problem | null {
 }
 
 function nulProblem(text: string, at: number): Problem {
-  const before = text.slice(0, at).split(/\r\n|\r|\n/);
-  const position = (before.at(-1) ?? '').length + 1;
+  const before = text.slice(0, at).replace(/\r\n?/g, '\n');
+  const position = before.length - before.lastIndexOf('\n');
   return makeProblem({
     code: 'nul-byte',
-    line: before.length,
+    line: 1 + countLineFeeds(before, 0, before.length),
     found: '\0',
     foundWords: `character ${position} is a NUL byte, which no text holds`,
     expected: `The file is damaged or not a text file. ${SAVE_AS}`,

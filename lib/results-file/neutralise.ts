@@ -14,5 +14,5 @@ export function neutraliseCell(text: string): string {
 
 /** On the way in: takes off one leading apostrophe when a sign that neutraliseCell guards against follows. */
 export function restoreCell(text: string): string {
-  return MARKED.test(text) ? text.slice(1) : text;
+  return text.startsWith("'") && MARKED.test(text) ? text.slice(1) : text;
 }

@@ -13,12 +13,15 @@ export function resultWords(mark: DecimalMark | null): string {
   return 'Write a number such as 12.5, <2.0, >300 or <LOQ; the unit belongs in the column unit.';
 }
 
-export function uncertaintyWords(mark: DecimalMark | null): string {
-  return `Write a number above 0, such as ${example('0.8', mark)}, in the unit of the result.`;
+/** What expanded_uncertainty and loq may hold. */
+export function positiveWords(text: string, mark: DecimalMark | null): string {
+  return `Write a number above 0, such as ${example(text, mark)}, in the unit of the result.`;
 }
 
-export function loqWords(mark: DecimalMark | null): string {
-  return `Write a number above 0, such as ${example('2.0', mark)}, in the unit of the result.`;
+/** A hint about the cell, and the general words where the hint leaves something open. */
+export function withHint(hint: string, isWholeHint: boolean, general: string): string {
+  if (hint === '') return general;
+  return isWholeHint ? hint : `${hint} ${general}`;
 }
 
 export const REASON_WORDS =

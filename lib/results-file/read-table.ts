@@ -8,7 +8,7 @@ import { Findings } from './problem';
 import { restoreCell } from './neutralise';
 import { CONTROL_CODE } from './row-cells';
 import type { FileKind } from './result-types';
-import { findLineDefect } from './scan-lines';
+import { findLongLine, findQuoteDefect, type LineDefect } from './scan-lines';
 import type { Table, TableRow } from './table';
 
 const HAS_CONTENT = /[^\s,;"]/;
@@ -23,12 +23,11 @@ const HAS_CONTENT = /[^\s,;"]/;
 export function readTable(text: string, kind: FileKind = 'laboratory'): Table {
   const findings = new Findings();
   const lines = cutEmptyEnd(text.replace(/\r\n?/g, '\n'));
+  const long = findLongLine(lines);
+  if (long !== null) return refuseLine(long, null, findings);
   const separator = findSeparator(lines);
-  const defect = findLineDefect(lines, separator);
-  if (defect !== null) {
-    neverParsed(defect, findings);
-    return { ...EMPTY, separator, findings };
-  }
+  const quote = findQuoteDefect(lines, separator);
+  if (quote !== null) return refuseLine(quote, separator, findings);
   const gatherer = new RowGatherer(separator, kind, findings);
   Papa.parse<string[]>(lines, {
     delimiter: separator,
@@ -38,6 +37,11 @@ export function readTable(text: string, kind: FileKind = 'laboratory'): Table {
     },
   });
   return { ...gatherer.finish(), hasControlCodes: CONTROL_CODE.test(lines) };
+}
+
+function refuseLine(defect: LineDefect, separator: Separator | null, findings: Findings): Table {
+  neverParsed(defect, findings);
+  return { ...EMPTY, separator, findings };
 }
 
 const EMPTY = {
@@ -100,7 +104,7 @@ class RowGatherer {
     if (this.headerLine === null) return this.takeHeader(line, cells);
     this.rowCount += 1;
     if (this.rowCount > MAX_ROWS) return this.refuseTooMany();
-    if (cells.length === this.table.header.length) this.rows.push({ line, cells: cells.map(restoreCell) });
+    if (cells.length === this.table.header.length) this.rows.push({ line, cells: restoreRow(cells) });
     else this.complainOfLength(line, cells);
     return true;
   }
@@ -155,6 +159,10 @@ class RowGatherer {
       expected: `Write one cell for each column, empty ones too.${comma}`,
     });
   }
+}
+
+function restoreRow(cells: readonly string[]): readonly string[] {
+  return cells.some((cell) => cell.startsWith("'")) ? cells.map(restoreCell) : cells;
 }
 
 function lineFeedsIn(cells: readonly string[]): number {

@@ -1,90 +1,79 @@
-import { readNumber, type ReadNumber } from './read-number';
-import { REASON_WORDS, resultWords, example } from './number-words';
+import { example, REASON_WORDS, resultWords, withHint } from './number-words';
 import type { ProblemCode } from './problem';
+import { readNumber, type ReadNumber } from './read-number';
 import type { DecimalMark, ResultKind } from './result-types';
+import type { SideNumber } from './side-cells';
 
 export type ReadResult =
-  | { ok: true; kind: ResultKind; text: string | null; hasMinusSign: boolean }
+  /** text: exact decimal text of the number or the limit; text and value are null when not measured. */
+  | { ok: true; kind: ResultKind; text: string | null; value: number | null; hasMinusSign: boolean }
   /** words: what was found, when quoting the cell would not say it. */
   | { ok: false; code: ProblemCode; words: string | null; expected: string };
 
-/** The other columns of the row that the meaning of a result hangs on. */
-type Beside = {
-  mark: DecimalMark | null;
-  comment: string;
-  /** Decimal text of the loq column; null when that is empty or wrong. */
-  loq: string | null;
-  /** True when the loq column has a complaint of its own. */
-  isLoqWrong: boolean;
-};
+/** What the meaning of a result hangs on besides its own cell. */
+type Beside = { mark: DecimalMark | null; comment: string; loq: SideNumber };
 
-const LIMIT = /^([<>])\s*(.*)$/;
-const NOT_DETECTED = /^(<\s*lod|n\.?\s*d\.?|n\/?a|not detected|nicht nachweisbar|-+|\u2013|\u2014)$/i;
+const OR_EQUAL = /^([<>]\s*=|[\u2264\u2265])/;
+const NOT_DETECTED = /^(<\s*lod|n\.?\s*d\.?|n\/?a|not detected|-+|\u2013|\u2014)$/i;
 
 /** Reads a trimmed result cell: a number, <LOQ, <2.0, >300, or empty with a reason in the comment. */
 export function readResult(cell: string, beside: Beside): ReadResult {
+  const { mark } = beside;
   if (cell === '') return readEmpty(beside);
-  const limit = LIMIT.exec(cell);
-  if (limit !== null && !NOT_DETECTED.test(cell)) return readLimit(limit[1] === '<', limit[2] ?? '', beside);
-  if (/^[\u2264\u2265]/.test(cell)) return refuseOrEqual(beside);
-  if (NOT_DETECTED.test(cell)) return refuseNotDetected(beside);
-  const number = readNumber(cell, beside.mark);
-  if (!number.ok) return explain(number, beside);
-  return { ok: true, kind: 'value', text: number.text, hasMinusSign: number.hasMinusSign };
+  if (NOT_DETECTED.test(cell)) {
+    const limit = example('<2.0', mark);
+    return refuse(
+      `Write <LOQ with the limit in the column loq, or the limit itself, such as ${limit}. ${REASON_WORDS}`,
+    );
+  }
+  if (OR_EQUAL.test(cell)) {
+    return refuse(`Write ${example('<2.0', mark)} or ${example('>300', mark)}, without "or equal".`);
+  }
+  const first = cell.charAt(0);
+  if (first === '<' || first === '>') return readLimit(cell, cell.slice(1).trim(), beside);
+  const number = readNumber(cell, mark);
+  return number.ok ? { ...number, kind: 'value' } : explain(number, mark);
 }
 
-function explain(number: Extract<ReadNumber, { ok: false }>, { mark }: Beside): ReadResult {
-  const expected = number.hint === '' ? resultWords(mark) : `${number.hint} ${resultWords(mark)}`;
+function refuse(expected: string): ReadResult {
+  return { ok: false, code: 'not-a-number', words: null, expected };
+}
+
+function explain(number: Extract<ReadNumber, { ok: false }>, mark: DecimalMark | null): ReadResult {
+  const expected = withHint(number.hint, number.isWholeHint, resultWords(mark));
   return { ok: false, code: number.code, words: number.words, expected };
 }
 
-function readEmpty({ comment, mark }: Beside): ReadResult {
-  if (comment !== '') return { ok: true, kind: 'not-measured', text: null, hasMinusSign: false };
-  const expected = `${resultWords(mark)} ${REASON_WORDS}`;
+function readEmpty({ comment }: Beside): ReadResult {
+  if (comment !== '') return { ok: true, kind: 'not-measured', text: null, value: null, hasMinusSign: false };
+  const expected = 'Write the result or, when there is none, the reason in the column comment.';
   return { ok: false, code: 'reason-missing', words: 'found an empty cell and no reason', expected };
 }
 
-function readLimit(isBelow: boolean, rest: string, beside: Beside): ReadResult {
-  const kind = isBelow ? 'below' : 'above';
-  const { mark } = beside;
-  if (rest.startsWith('=')) return refuseOrEqual(beside);
+/** @param rest - what stands after < or >. */
+function readLimit(cell: string, rest: string, { mark, loq }: Beside): ReadResult {
+  const isBelow = cell.startsWith('<');
   if (/^loq$/i.test(rest)) {
-    if (!isBelow) {
-      const expected = `Write the limit itself, such as ${example('>300', mark)}.`;
-      return { ok: false, code: 'not-a-number', words: null, expected };
-    }
-    return readBelowLoq(beside);
+    return isBelow
+      ? readBelowLoq(loq, mark)
+      : refuse(`Write the limit itself, such as ${example('>300', mark)}.`);
   }
-  const number = readNumber(rest, mark);
-  if (!number.ok) return explain({ ...number, words: null }, beside);
+  const number = readNumber(rest, mark, cell);
+  if (!number.ok) return explain(number, mark);
   if (number.value <= 0) {
-    return {
-      ok: false,
-      code: 'out-of-range',
-      words: null,
-      expected: `A limit is above 0, such as ${example('<2.0', mark)}.`,
-    };
+    const expected = `A limit is above 0, such as ${example('<2.0', mark)}.`;
+    return { ok: false, code: 'out-of-range', words: null, expected };
   }
-  return { ok: true, kind, text: number.text, hasMinusSign: false };
+  return { ...number, kind: isBelow ? 'below' : 'above' };
 }
 
-function readBelowLoq({ loq, isLoqWrong, mark }: Beside): ReadResult {
-  if (loq !== null) return { ok: true, kind: 'below', text: loq, hasMinusSign: false };
-  const state = isLoqWrong ? 'no usable number' : 'nothing';
+function readBelowLoq({ text, value, isWrong }: SideNumber, mark: DecimalMark | null): ReadResult {
+  if (text !== null) return { ok: true, kind: 'below', text, value, hasMinusSign: false };
+  const state = isWrong ? 'no usable number' : 'nothing';
   return {
     ok: false,
     code: 'loq-missing',
     words: `found "<LOQ", but the column loq has ${state} in this row`,
     expected: `Give the limit of quantification there, or write the limit itself, such as ${example('<2.0', mark)}.`,
   };
-}
-
-function refuseOrEqual({ mark }: Beside): ReadResult {
-  const expected = `Write ${example('<2.0', mark)} or ${example('>300', mark)}, without "or equal".`;
-  return { ok: false, code: 'not-a-number', words: null, expected };
-}
-
-function refuseNotDetected({ mark }: Beside): ReadResult {
-  const expected = `Write <LOQ with the limit in the column loq, or the limit itself, such as ${example('<2.0', mark)}. ${REASON_WORDS}`;
-  return { ok: false, code: 'not-a-number', words: null, expected };
 }

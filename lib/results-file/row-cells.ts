@@ -1,5 +1,4 @@
 import type { ColumnName } from './columns';
-import { knownColumns } from './columns';
 import { MAX_CELL } from './limits';
 import type { Findings, NoticeCode, ProblemCode } from './problem';
 import { nameCharacter, quoteFound } from './quote-found';
@@ -7,8 +6,6 @@ import type { Table, TableRow } from './table';
 
 /** Control codes other than the tab and the line feed, which RFC 4180 cells may hold. */
 export const CONTROL_CODE = /[\u0000-\u0008\u000b-\u001f\u007f-\u009f]/;
-
-const ALL_COLUMNS = knownColumns('whole-round');
 
 /** The cells of one row by column name, and the way to complain of them. */
 export class RowCells {
@@ -47,9 +44,8 @@ export class RowCells {
   /** False when a cell is too long or holds control codes; such a row is not looked at further. */
   areReadable(): boolean {
     let isReadable = true;
-    for (const column of ALL_COLUMNS) {
-      const index = this.table.columns.get(column);
-      const cell = index === undefined ? '' : (this.cells[index] ?? '');
+    for (const [column, index] of this.table.columns) {
+      const cell = this.cells[index] ?? '';
       if (cell.length > MAX_CELL) {
         isReadable = false;
         const size = cell.length.toLocaleString('en-GB');

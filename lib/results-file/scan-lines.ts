@@ -9,17 +9,8 @@ export type LineDefect =
   | { kind: 'line-too-long'; line: number; found: string }
   | { kind: 'too-many-lines'; found: string };
 
-/**
- * Looks for what the CSV parser would carry on through: a quote that is never closed, text after a closing
- * quote, a line without end. The parser swallows the rest of the file in those cases, or fills the memory.
- *
- * @param text - lines end with a line feed only.
- */
-export function findLineDefect(text: string, separator: Separator): LineDefect | null {
-  return findLongLine(text) ?? (text.includes('"') ? findQuoteDefect(text, separator) : null);
-}
-
-function findLongLine(text: string): LineDefect | null {
+/** Looks for lines without end, which would fill the memory once they are split. */
+export function findLongLine(text: string): LineDefect | null {
   let line = 1;
   for (let start = 0; start < text.length; line += 1) {
     const end = nextIndex(text, '\n', start);
@@ -27,13 +18,21 @@ function findLongLine(text: string): LineDefect | null {
       return { kind: 'line-too-long', line, found: `${(end - start).toLocaleString('en-GB')} characters` };
     }
     start = end + 1;
-    if (line > MAX_LINES)
+    if (line > MAX_LINES) {
       return { kind: 'too-many-lines', found: `more than ${MAX_LINES.toLocaleString('en-GB')} lines` };
+    }
   }
   return null;
 }
 
-function findQuoteDefect(text: string, separator: Separator): LineDefect | null {
+/**
+ * Looks for a quote that is never closed and for text after a closing quote. The parser would carry on through
+ * both and swallow the rest of the file.
+ *
+ * @param text - lines end with a line feed only.
+ */
+export function findQuoteDefect(text: string, separator: Separator): LineDefect | null {
+  if (!text.includes('"')) return null;
   let line = 1;
   let at = 0;
   while (at < text.length) {

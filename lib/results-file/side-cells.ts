@@ -1,43 +1,42 @@
+import type { ColumnName } from './columns';
 import { readDate } from './date-cell';
 import { listNames } from './header';
 import { DEFAULT_COVERAGE_FACTOR, MAX_COMMENT, MAX_COVERAGE_FACTOR, MIN_COVERAGE_FACTOR } from './limits';
+import { withHint } from './number-words';
 import type { PlanIndex } from './plan-index';
-import type { ColumnName } from './columns';
 import { readNumber } from './read-number';
 import type { DecimalMark } from './result-types';
 import type { RowCells } from './row-cells';
 
-/** text: exact decimal text, null when the cell is empty or was refused. */
-export type SideNumber = { text: string | null; isWrong: boolean };
+/** text: exact decimal text; null, as the value, when the cell is empty or was refused. */
+export type SideNumber = { text: string | null; value: number | null; isWrong: boolean };
+
+const NONE: SideNumber = { text: null, value: null, isWrong: false };
+const WRONG: SideNumber = { text: null, value: null, isWrong: true };
 
 /** Reads a cell that is empty or holds a number above 0. */
 export function readPositive(
   row: RowCells,
   column: ColumnName,
   mark: DecimalMark | null,
-  words: string,
+  words: () => string,
 ): SideNumber {
   const cell = row.text(column);
-  if (cell === '') return { text: null, isWrong: false };
+  if (cell === '') return NONE;
   const number = readNumber(cell, mark);
-  if (!number.ok) {
-    row.refuse(column, number.code, number.hint === '' ? words : `${number.hint} ${words}`, number.words);
-    return { text: null, isWrong: true };
-  }
-  if (number.value <= 0) {
-    row.refuse(column, 'out-of-range', words);
-    return { text: null, isWrong: true };
-  }
-  return { text: number.text, isWrong: false };
+  if (number.ok && number.value > 0) return { text: number.text, value: number.value, isWrong: false };
+  if (number.ok) row.refuse(column, 'out-of-range', words());
+  else row.refuse(column, number.code, withHint(number.hint, number.isWholeHint, words()), number.words);
+  return WRONG;
 }
 
+const factorWords = () => `Write a number from ${MIN_COVERAGE_FACTOR} to ${MAX_COVERAGE_FACTOR}, such as 2.`;
+
 export function readCoverageFactor(row: RowCells, mark: DecimalMark | null): number {
-  const words = `Write a number from ${MIN_COVERAGE_FACTOR} to ${MAX_COVERAGE_FACTOR}, such as 2.`;
-  const { text } = readPositive(row, 'coverage_factor', mark, words);
-  if (text === null) return DEFAULT_COVERAGE_FACTOR;
-  const factor = Number(text);
+  const factor = readPositive(row, 'coverage_factor', mark, factorWords).value;
+  if (factor === null) return DEFAULT_COVERAGE_FACTOR;
   if (factor < MIN_COVERAGE_FACTOR || factor > MAX_COVERAGE_FACTOR) {
-    row.refuse('coverage_factor', 'out-of-range', words);
+    row.refuse('coverage_factor', 'out-of-range', factorWords());
   }
   return factor;
 }
@@ -66,12 +65,11 @@ export function readAnalysedOn(row: RowCells, today: string): string | null {
 
 export function readComment(row: RowCells): string {
   const text = row.text('comment');
-  if (text.length > MAX_COMMENT) {
-    const length = [...text].length;
-    if (length > MAX_COMMENT) {
-      const words = `the comment has ${length.toLocaleString('en-GB')} characters`;
-      row.refuse('comment', 'comment-too-long', `At most ${MAX_COMMENT} are kept.`, words);
-    }
+  if (text.length <= MAX_COMMENT) return text;
+  const length = [...text].length;
+  if (length > MAX_COMMENT) {
+    const words = `the comment has ${length.toLocaleString('en-GB')} characters`;
+    row.refuse('comment', 'comment-too-long', `At most ${MAX_COMMENT} are kept.`, words);
   }
   return text;
 }

@@ -1,5 +1,5 @@
-/** A decimal number as text, with a point: sign, digits, exponent. The value is exact; no binary fraction is made. */
-const DECIMAL = /^([+-]?)(\d+\.?\d*|\.\d+)(?:[eE]([+-]?\d{1,6}))?$/;
+/** A decimal number as text, with a point: sign, digits, exponent. Linear in the length, also for what does not match. */
+const DECIMAL = /^([+-]?)(\d+(?:\.\d*)?|\.\d+)(?:[eE]([+-]?\d{1,6}))?$/;
 /** Past this many places the shifted text keeps an exponent instead of a row of zeros. */
 const MOST_ZEROS = 30;
 
@@ -16,10 +16,14 @@ export function isDecimalText(text: string): boolean {
  * @returns NaN when the text is no decimal number; Infinity or 0 when it is out of the range of numbers.
  */
 export function numberFromDecimal(text: string, exponent = 0): number {
-  const parts = DECIMAL.exec(text);
-  if (parts === null) return Number.NaN;
-  const value = Number(`${parts[1]}${parts[2]}e${Number(parts[3] ?? 0) + exponent}`);
+  if (!DECIMAL.test(text)) return Number.NaN;
+  const value = Number(exponent === 0 ? text : withExponent(text, exponent));
   return value === 0 ? 0 : value;
+}
+
+function withExponent(text: string, exponent: number): string {
+  const at = text.search(/e/i);
+  return at === -1 ? `${text}e${exponent}` : `${text.slice(0, at)}e${Number(text.slice(at + 1)) + exponent}`;
 }
 
 /** True when every digit is 0, however it is written. */

@@ -91,7 +91,11 @@ const COMMON_NAMES: Record<string, string> = {
   'w/w%': '%',
 };
 
+/** No code is longer; the searches below are quadratic in the length. */
+const LONGEST_CODE = 40;
+
 function suggestCode(code: string): string | null {
+  if (code.length > LONGEST_CODE) return null;
   const plain = code
     .toLowerCase()
     .replace(MICRO, 'u')
