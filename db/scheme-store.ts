@@ -21,6 +21,12 @@ export async function findScheme(connection: Db, slug: string): Promise<Scheme |
   return row ? fromRow<Scheme>(row) : null;
 }
 
+export async function getSchemeById(connection: Db, id: number): Promise<Scheme> {
+  const row = await connection('schemes').where({ id }).first();
+  if (!row) throw new Error(`scheme ${id} is missing`);
+  return fromRow<Scheme>(row);
+}
+
 export async function createScheme(
   connection: Db,
   scheme: Omit<Scheme, 'id' | 'createdAt'>,

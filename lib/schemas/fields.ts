@@ -84,7 +84,8 @@ export function utcDateTime(what: string) {
     });
 }
 
+/** A tick box: what a form sends, or the boolean that a form library keeps. */
 export const checkbox = z
-  .union([z.literal('on'), z.literal('true'), z.literal('1')])
+  .union([z.literal('on'), z.literal('true'), z.literal('1'), z.boolean()])
   .optional()
-  .transform((value) => value !== undefined);
+  .transform((value) => value !== undefined && value !== false);

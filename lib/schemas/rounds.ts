@@ -24,7 +24,7 @@ export const SCORE_KIND_NAMES = {
   'e-n': 'E_n (with expanded uncertainties)',
 } as const;
 
-const CURRENCIES = ['EUR', 'USD', 'GBP', 'CHF'] as const;
+export const CURRENCIES = ['EUR', 'USD', 'GBP', 'CHF'] as const;
 export const MAX_REPLICATES = 10;
 
 export const roundSchema = z

@@ -7,10 +7,17 @@ import {
   listRoundMeasurands,
   removeRoundMeasurand,
   updateRoundMeasurand,
+  type RoundMeasurand,
 } from '@/db/round-measurand-store';
 import { createRound, findRound, updateRoundPlan, type Round } from '@/db/round-store';
 import { findScheme, listSlugsLike } from '@/db/scheme-store';
-import { createTestItem, listTestItems, removeTestItem, updateTestItem } from '@/db/test-item-store';
+import {
+  createTestItem,
+  listTestItems,
+  removeTestItem,
+  updateTestItem,
+  type TestItem,
+} from '@/db/test-item-store';
 import { inTransaction } from '@/db/transaction';
 import { AppError, notFound } from '@/lib/errors';
 import type { Actor } from '@/lib/rules/roles';
@@ -26,6 +33,26 @@ export async function getRound(slug: string): Promise<Round> {
   const round = await findRound(db(), slug);
   if (!round) throw notFound('The round');
   return round;
+}
+
+export type PlannedItem = TestItem;
+export type PlannedMeasurand = RoundMeasurand;
+
+export interface RoundPlanOverview {
+  items: PlannedItem[];
+  measurands: PlannedMeasurand[];
+  /** The measurands of the scheme, to choose from. */
+  choices: { id: number; code: string; name: string }[];
+}
+
+export async function getRoundPlan(slug: string): Promise<RoundPlanOverview> {
+  const round = await getRound(slug);
+  const choices = await listMeasurands(db(), round.schemeId);
+  return {
+    items: await listTestItems(db(), round.id),
+    measurands: await listRoundMeasurands(db(), round.id),
+    choices: choices.map(({ id, code, name }) => ({ id, code, name })),
+  };
 }
 
 export async function addRound(

@@ -18,6 +18,9 @@ import { freeSlug, slugify } from '@/lib/slug';
 /** Names that stand for pages below /schemes. */
 const RESERVED = ['new'];
 
+export type { Measurand } from '@/db/measurand-store';
+export type { Scheme } from '@/db/scheme-store';
+
 export async function getScheme(slug: string): Promise<Scheme> {
   const scheme = await findScheme(db(), slug);
   if (!scheme) throw notFound('The scheme');

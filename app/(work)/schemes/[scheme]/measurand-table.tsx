@@ -1,0 +1,58 @@
+import type { ReactNode } from 'react';
+import { sigmaWords } from '@/components/rounds/plan-words';
+import { Table, Td, Th } from '@/components/ui/table';
+import type { Measurand } from '@/lib/services/schemes';
+
+export function MeasurandTable({
+  measurands,
+  edit,
+}: {
+  measurands: Measurand[];
+  edit?: (measurand: Measurand) => ReactNode;
+}) {
+  return (
+    <Table caption="Measurands" hideCaption>
+      <thead>
+        <tr>
+          <Th>Code</Th>
+          <Th>Name</Th>
+          <Th>Unit</Th>
+          <Th numeric>Decimals</Th>
+          <Th>Decision limit</Th>
+          <Th>sigma_pt</Th>
+          {edit && (
+            <Th>
+              <span className="sr-only">Edit</span>
+            </Th>
+          )}
+        </tr>
+      </thead>
+      <tbody>
+        {measurands.map((measurand) => (
+          <tr key={measurand.id}>
+            <Th scope="row" className="font-semibold">
+              {measurand.code}
+            </Th>
+            <Td>{measurand.name}</Td>
+            <Td>{measurand.unit}</Td>
+            <Td numeric>{measurand.decimals}</Td>
+            <Td>
+              {measurand.decisionLimit === null ? (
+                <span className="text-grey">none</span>
+              ) : (
+                <>
+                  {measurand.decisionLimit} {measurand.unit}
+                  <span className="block text-sm text-ink-soft">
+                    {measurand.decisionLimitSource ?? 'source not given'}
+                  </span>
+                </>
+              )}
+            </Td>
+            <Td>{sigmaWords(measurand, measurand.unit)}</Td>
+            {edit && <Td className="text-right">{edit(measurand)}</Td>}
+          </tr>
+        ))}
+      </tbody>
+    </Table>
+  );
+}

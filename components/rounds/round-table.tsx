@@ -1,0 +1,69 @@
+import Link from 'next/link';
+import { StateTag } from '@/components/ui/state-tag';
+import { Table, Td, Th } from '@/components/ui/table';
+import { formatDate } from '@/lib/format';
+import type { RoundState } from '@/lib/rules/round-states';
+
+export interface RoundRow {
+  slug: string;
+  name: string;
+  schemeName: string;
+  schemeSlug: string;
+  state: RoundState;
+  opensAt: string;
+  closesAt: string;
+  publishAt: string;
+  publishedAt: string | null;
+  participantCount: number;
+  submittedCount: number;
+}
+
+export type RoundTableProps = {
+  caption: string;
+  hideCaption?: boolean;
+  rounds: RoundRow[];
+  hideScheme?: boolean;
+};
+
+export function RoundTable({ caption, hideCaption = true, rounds, hideScheme }: RoundTableProps) {
+  return (
+    <Table caption={caption} hideCaption={hideCaption} fullHeight>
+      <thead>
+        <tr>
+          <Th>Round</Th>
+          {!hideScheme && <Th>Scheme</Th>}
+          <Th>State</Th>
+          <Th>Results due</Th>
+          <Th>Publication</Th>
+          <Th numeric>Results sent</Th>
+        </tr>
+      </thead>
+      <tbody>
+        {rounds.map((round) => (
+          <tr key={round.slug}>
+            <Th scope="row">
+              <Link href={`/rounds/${round.slug}`} className="text-link font-semibold">
+                {round.name}
+              </Link>
+            </Th>
+            {!hideScheme && (
+              <Td>
+                <Link href={`/schemes/${round.schemeSlug}`} className="text-link">
+                  {round.schemeName}
+                </Link>
+              </Td>
+            )}
+            <Td>
+              <StateTag of="round" state={round.state} />
+            </Td>
+            <Td className="figures">{formatDate(round.closesAt)}</Td>
+            <Td className="figures">{formatDate(round.publishedAt ?? round.publishAt)}</Td>
+            <Td numeric className="figures">
+              {round.submittedCount} of {round.participantCount}
+            </Td>
+          </tr>
+        ))}
+      </tbody>
+    </Table>
+  );
+}
