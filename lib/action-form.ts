@@ -1,7 +1,7 @@
 import type * as z from 'zod';
 
 /** What an action hands back to its form; `values` are the fields as typed, without passwords. */
-export type ActionResult<T = undefined> =
+export type ActionResult<T = void> =
   | { ok: true; data: T }
   | {
       ok: false;
@@ -11,7 +11,7 @@ export type ActionResult<T = undefined> =
     };
 
 /** State for useActionState: null before the first try. */
-export type FormState<T = undefined> = ActionResult<T> | null;
+export type FormState<T = void> = ActionResult<T> | null;
 
 const SECRET_FIELD = /password|token|secret/i;
 const LIST_SUFFIX = '[]';

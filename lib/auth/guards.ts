@@ -2,7 +2,7 @@ import 'server-only';
 import { headers } from 'next/headers';
 import { notFound, redirect } from 'next/navigation';
 import { isAppError } from '@/lib/errors';
-import type { Permission, Subject } from '@/lib/rules/permissions';
+import { laboratoriesOf, type Permission, type Subject } from '@/lib/rules/permissions';
 import type { Actor } from '@/lib/rules/roles';
 import { authorise, type AuthoriseOptions } from './authorise';
 import { PATH_HEADER, signInAddress } from './local-path';
@@ -37,4 +37,15 @@ export async function requirePageActor(permission: Permission, subject: Subject 
     if (isAppError(error)) notFound();
     throw error;
   }
+}
+
+/** For pages of a laboratory: the actor, and the laboratory chosen in the header; 404 without one. */
+export async function requireOwnLaboratory(
+  permission: Permission,
+): Promise<{ actor: Actor; laboratory: { id: number; name: string } }> {
+  const { laboratoryId } = await requireActor();
+  const actor = await requirePageActor(permission, { laboratoryId });
+  const laboratory = laboratoriesOf(actor).find((entry) => entry.id === laboratoryId);
+  if (!laboratory) notFound();
+  return { actor, laboratory };
 }

@@ -1,0 +1,17 @@
+'use client';
+
+import { ErrorMessage } from './error-message';
+
+export default function ErrorPage({
+  error,
+  reset,
+}: {
+  error: Error & { digest?: string };
+  reset: () => void;
+}) {
+  return (
+    <main id="main" className="mx-auto w-full max-w-page px-4 md:px-6">
+      <ErrorMessage error={error} retry={reset} home={{ href: '/', label: 'Front page' }} />
+    </main>
+  );
+}
