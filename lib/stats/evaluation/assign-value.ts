@@ -49,7 +49,7 @@ function statedValue({ value, standardUncertainty }: AssignedValueSetting): Assi
     !(standardUncertainty >= 0 && Number.isFinite(standardUncertainty))
   ) {
     const reason = 'the plan states no standard uncertainty of the assigned value';
-    return { value, standardUncertainty: null, method, count: 0, reason };
+    return { value: value + 0, standardUncertainty: null, method, count: 0, reason };
   }
-  return { value, standardUncertainty, method, count: 0, reason: null };
+  return { value: value + 0, standardUncertainty: standardUncertainty + 0, method, count: 0, reason: null };
 }

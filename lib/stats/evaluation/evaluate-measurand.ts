@@ -88,7 +88,13 @@ export function evaluateMeasurand(
     scores,
     censored,
     notes: writeNotes(facts),
-    working: working ? evaluationWorking(input, Array.from(sorted), facts) : null,
+    working: working
+      ? evaluationWorking(
+          input,
+          Array.from(sorted, (value) => value + 0),
+          facts,
+        )
+      : null,
   };
 }
 

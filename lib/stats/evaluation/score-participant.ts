@@ -37,8 +37,8 @@ export function scoreParticipant(
   const dPercent = withAssigned(basis, (assignedValue) => percentDifference({ value, assignedValue }));
   return {
     participant,
-    value,
-    standardUncertainty,
+    value: value + 0, // a negative zero would not survive JSON
+    standardUncertainty: standardUncertainty === null ? null : standardUncertainty + 0,
     excluded,
     D: D.value,
     dPercent: dPercent.value,
@@ -104,7 +104,14 @@ export function judgeParticipant(
   const { participant, comparator, limit } = result;
   const { assignedValue, sigmaPt } = basis;
   const found = judged();
-  return { participant, comparator, limit, excluded, judgement: found.value, reason: found.reason };
+  return {
+    participant,
+    comparator,
+    limit: limit + 0,
+    excluded,
+    judgement: found.value,
+    reason: found.reason,
+  };
 
   function judged() {
     if (assignedValue === null) return missing(NO_ASSIGNED_VALUE);

@@ -101,17 +101,19 @@ function roundedAt(value: number, place: number): number {
 }
 
 function traceRow(iteration: number, from: State, to: State, step: Step): AlgorithmAIteration {
-  const delta = WINSOR_MULTIPLE * from.scale;
+  // Kept finite for JSON; a limit at the end of the number range moves no value.
+  const bounded = (x: number) => Math.min(Number.MAX_VALUE, Math.max(-Number.MAX_VALUE, x));
+  const delta = bounded(WINSOR_MULTIPLE * from.scale);
   return {
     iteration,
     location: from.location,
     scale: from.scale,
     delta,
-    lower: from.location - delta,
-    upper: from.location + delta,
+    lower: bounded(from.location - delta),
+    upper: bounded(from.location + delta),
     countBelow: step.below,
     countAbove: step.above,
     newLocation: to.location,
-    newScale: to.scale,
+    newScale: bounded(to.scale),
   };
 }
