@@ -1,6 +1,6 @@
 import 'server-only';
 import { addAuditEntry } from '@/db/audit-store';
-import { db } from '@/db/connection';
+import { db, type Db } from '@/db/connection';
 import { listEnrolments } from '@/db/enrolment-store';
 import {
   createEvaluatedMeasurands,
@@ -74,38 +74,51 @@ function scoresOf({ plan, evaluation }: Evaluated, enrolmentIds: ReadonlyMap<str
   return [...scored, ...censored];
 }
 
-/** Computes every measurand of a closed round and keeps the whole as the next version, which never changes again. */
+/** Computes every measurand of a round and keeps the whole as its next version, in the caller's transaction. */
+export async function keepEvaluation(
+  trx: Db,
+  roundId: number,
+  by: { userId: number | null; at: string },
+): Promise<{ version: number; inputsSha256: string }> {
+  const plans = await listRoundMeasurands(trx, roundId);
+  const evaluated = evaluateAll(plans, await listRoundResults(trx, roundId));
+  const inputs = inputsText(evaluated.map(({ plan, input }) => ({ roundMeasurandId: plan.id, input })));
+  const kept = {
+    version: ((await findLatestEvaluation(trx, roundId))?.version ?? 0) + 1,
+    inputsSha256: hashText(inputs),
+  };
+  const evaluationId = await createEvaluation(trx, {
+    ...kept,
+    roundId,
+    libraryVersion: LIBRARY_VERSION,
+    settingsJson: JSON.stringify(plans),
+    inputsJson: inputs,
+    createdBy: by.userId,
+    createdAt: by.at,
+  });
+  const enrolments = await listEnrolments(trx, roundId);
+  const enrolmentIds = new Map(enrolments.map((enrolment) => [enrolment.participantCode, enrolment.id]));
+  await createEvaluatedMeasurands(trx, evaluationId, evaluated.map(rowOf));
+  await createScores(
+    trx,
+    evaluationId,
+    evaluated.flatMap((entry) => scoresOf(entry, enrolmentIds)),
+  );
+  return kept;
+}
+
+/** Evaluates a closed round; the version that is kept never changes again. */
 export async function evaluateRound(actor: Actor, slug: string): Promise<{ version: number }> {
   return inTransaction(db(), async (trx) => {
     const round = await requireStep(trx, slug, 'evaluate');
-    const plans = await listRoundMeasurands(trx, round.id);
-    const evaluated = evaluateAll(plans, await listRoundResults(trx, round.id));
-    const inputs = inputsText(evaluated.map(({ plan, input }) => ({ roundMeasurandId: plan.id, input })));
-    const version = ((await findLatestEvaluation(trx, round.id))?.version ?? 0) + 1;
-    const evaluationId = await createEvaluation(trx, {
-      roundId: round.id,
-      version,
-      libraryVersion: LIBRARY_VERSION,
-      settingsJson: JSON.stringify(plans),
-      inputsJson: inputs,
-      inputsSha256: hashText(inputs),
-      createdBy: actor.userId,
-      createdAt: new Date().toISOString(),
-    });
-    const enrolments = await listEnrolments(trx, round.id);
-    const enrolmentIds = new Map(enrolments.map((enrolment) => [enrolment.participantCode, enrolment.id]));
-    await createEvaluatedMeasurands(trx, evaluationId, evaluated.map(rowOf));
-    await createScores(
-      trx,
-      evaluationId,
-      evaluated.flatMap((entry) => scoresOf(entry, enrolmentIds)),
-    );
-    await applyStep(trx, round, 'evaluate', { evaluatedAt: new Date().toISOString() });
+    const now = new Date().toISOString();
+    const { version, inputsSha256 } = await keepEvaluation(trx, round.id, { userId: actor.userId, at: now });
+    await applyStep(trx, round, 'evaluate', { evaluatedAt: now });
     await addAuditEntry(trx, {
       userId: actor.userId,
       roundId: round.id,
       action: 'round.evaluated',
-      detail: `version ${version}, inputs SHA-256 ${hashText(inputs)}`,
+      detail: `version ${version}, inputs SHA-256 ${inputsSha256}`,
     });
     return { version };
   });
