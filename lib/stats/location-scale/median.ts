@@ -13,7 +13,7 @@ import { medianOfSorted, sortedCopy } from '../internal/sorted';
  * Ties and equal values: allowed. Zero spread: that value. Order of input: does not matter.
  * Numerics: one sort, O(n log n); no overflow in the mean of two large values; zero is never negative zero.
  * Source: ISO 13528:2022, Annex C.2.1.
- * Checked by: tests/stats/location-scale/median.test.ts, tests/reference/proficiency.
+ * Checked by: tests/stats/location-scale/mad-e.test.ts, tests/reference/proficiency.
  * @example median([3, 1, 2, 10]) // => 2.5
  */
 export function median(values: readonly number[]): number {

@@ -23,7 +23,7 @@ export interface NIqrOptions {
  * Ties and equal values: allowed. Zero spread: 0. Order of input: does not matter.
  * Numerics: one sort, O(n log n).
  * Source: ISO 13528:2022, Annex C.2.3.
- * Checked by: tests/stats/location-scale/n-iqr.test.ts, tests/reference/proficiency.
+ * Checked by: tests/stats/location-scale/mad-e.test.ts and quantile.test.ts, tests/reference/proficiency.
  * @example nIqr([1, 2, 3, 4, 100]) // => 1.4826
  */
 export function nIqr(values: readonly number[], options: NIqrOptions = {}): number {
