@@ -1,8 +1,8 @@
 export type ChartSize = { width: number; height: number };
 
 /** Each chart is drawn twice, for wide and for narrow screens, so that its text stays readable. */
-export const WIDE: ChartSize = { width: 880, height: 360 };
-export const NARROW: ChartSize = { width: 358, height: 320 };
+export const WIDE: ChartSize = { width: 840, height: 350 };
+export const NARROW: ChartSize = { width: 358, height: 330 };
 
 /** Past this many points a chart is described as a whole instead of mark by mark. */
 export const MOST_MARKS = 150;

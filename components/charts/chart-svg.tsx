@@ -22,7 +22,7 @@ export function ChartSvg({ size, name, description, asWhole, className, children
       role={asWhole ? 'img' : 'group'}
       aria-label={name}
       aria-describedby={id}
-      className={cx('chart h-auto w-full text-[12px]', className)}
+      className={cx('chart h-auto w-full max-w-5xl text-[13px]', className)}
     >
       <desc id={id}>{description}</desc>
       {children}

@@ -131,7 +131,7 @@ function VerticalLine({ line, top, bottom }: { line: SigmaLine; top: number; bot
   return (
     <g>
       <line x1={line.x} x2={line.x} y1={top} y2={bottom} {...LINE_LOOKS[size]} />
-      <SigmaLabel multiple={line.multiple} x={line.x} y={top - 8} textAnchor="middle" />
+      <SigmaLabel multiple={line.multiple} x={line.x} y={top - 11} textAnchor="middle" />
     </g>
   );
 }

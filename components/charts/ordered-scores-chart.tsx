@@ -5,8 +5,15 @@ import { MOST_MARKS, type ChartSize } from './chart-size';
 import { ChartInTwoSizes } from './chart-svg';
 import type { ScorePoint } from './chart-types';
 import { describeScores, signalWords } from './describe';
-import { EdgeArrow, Mark, SignalShape, ThresholdLine } from './marks';
-import { hasScore, orderedScoresGeometry, orderScores, type ScoreBar } from './ordered-scores-geometry';
+import { EdgeValue } from './edge-value';
+import { Mark, SignalShape, ThresholdLine } from './marks';
+import {
+  codeLabel,
+  hasScore,
+  orderedScoresGeometry,
+  orderScores,
+  type ScoreBar,
+} from './ordered-scores-geometry';
 import { thresholdsOf } from './score-scale';
 
 export type OrderedScoresChartProps = {
@@ -142,7 +149,7 @@ function Bar({ bar, markSize, codesTop, scoreKind }: BarProps) {
           dy="0.35em"
           className={point.own ? 'fill-ink font-bold' : 'fill-ink-soft'}
         >
-          {point.own ? `${point.code} own` : point.code}
+          {codeLabel(point)}
         </text>
       )}
     </>
@@ -156,15 +163,13 @@ function BeyondEdge({ bar, outward, markSize, scoreKind }: BeyondEdgeProps) {
   return (
     <>
       <SignalShape signal={point.signal} x={middle} y={tip - outward * (markSize / 2 + 2)} size={markSize} />
-      <EdgeArrow x={middle} y={tip + outward * 3} direction={outward < 0 ? 'up' : 'down'} />
-      <text
-        transform={`translate(${middle} ${tip + outward * 11}) rotate(-90)`}
-        textAnchor={outward < 0 ? 'start' : 'end'}
-        dy="0.35em"
-        className="fill-ink"
-      >
-        {formatScore(point.score, scoreKind)}
-      </text>
+      <EdgeValue
+        x={middle}
+        y={tip}
+        labelX={bar.valueX}
+        text={formatScore(point.score, scoreKind)}
+        up={outward < 0}
+      />
     </>
   );
 }

@@ -2,6 +2,7 @@ import { scaleBand } from '@visx/scale';
 import { px, type ChartSize } from './chart-size';
 import type { ScorePoint } from './chart-types';
 import { clampSide, scoreExtent, scoreScale, type Clamped } from './score-scale';
+import { placeEdgeValues } from './spread-labels';
 import { thinLabels } from './thin-labels';
 
 export type ScoreBar = {
@@ -12,14 +13,15 @@ export type ScoreBar = {
   height: number;
   middle: number;
   tip: number;
+  valueX: number;
   clamped: Clamped;
   showsCode: boolean;
 };
 
 const MARGIN = { left: 40, right: 44, axis: 10 };
-const CODE_ROOM = 46;
-const VALUE_ROOM = 44;
-const LABEL_GAP = 13;
+const VALUE_ROOM = 48;
+const LABEL_GAP = 14;
+const LETTER = 7.4;
 
 export function hasScore(point: ScorePoint): point is ScorePoint & { score: number } {
   return point.score !== null && point.signal !== 'not-scored';
@@ -35,7 +37,8 @@ export function orderedScoresGeometry(points: readonly ScorePoint[], { width, he
   const ordered = orderScores(points);
   const extent = scoreExtent(ordered.map((point) => point.score));
   const top = MARGIN.axis + (ordered.some((point) => point.score > extent) ? VALUE_ROOM : 10);
-  const bottom = height - CODE_ROOM - (ordered.some((point) => point.score < -extent) ? VALUE_ROOM : 10);
+  const codeRoom = 10 + LETTER * Math.max(3, ...ordered.map((point) => codeLabel(point).length));
+  const bottom = height - codeRoom - (ordered.some((point) => point.score < -extent) ? VALUE_ROOM : 10);
   const y = scoreScale(extent, top, bottom);
   const x = scaleBand<number>({
     domain: ordered.map((_, index) => index),
@@ -52,30 +55,38 @@ export function orderedScoresGeometry(points: readonly ScorePoint[], { width, he
   const bars = ordered.map((point, index): ScoreBar => {
     const middle = middleOf(x, index);
     const clamped = clampSide(point.score, -extent, extent);
+    // Among hundreds of bars one's own would be too thin to show its colour.
+    const ownWidth = point.own ? Math.max(barWidth, 6) : barWidth;
     const tip = y(Math.max(-extent, Math.min(extent, point.score)));
     const zero = y(0);
     return {
       point,
-      x: px(middle - barWidth / 2),
-      width: px(barWidth),
+      x: px(middle - ownWidth / 2),
+      width: px(ownWidth),
       y: px(Math.min(tip, zero - 0.5)),
       height: px(Math.max(1, Math.abs(tip - zero))),
       middle: px(middle),
       tip: px(tip),
+      valueX: px(middle),
       clamped,
       showsCode: shown[index] ?? false,
     };
   });
+  placeEdgeValues(bars, (bar) => bar.middle, LABEL_GAP, [MARGIN.left + 4, width - MARGIN.right]);
   return {
     bars,
     y,
     zero: px(y(0)),
     left: MARGIN.left,
     right: width - MARGIN.right,
-    codesTop: height - CODE_ROOM + 4,
+    codesTop: px(height - codeRoom + 4),
     markSize: px(Math.max(5, Math.min(10, x.step() * 0.75))),
     missing: points.length - ordered.length,
   };
+}
+
+export function codeLabel(point: ScorePoint): string {
+  return point.own ? `${point.code} own` : point.code;
 }
 
 function middleOf(x: ReturnType<typeof scaleBand<number>>, index: number): number {

@@ -3,10 +3,13 @@ import { px, type ChartSize } from './chart-size';
 import type { AssignedValue, ResultPoint } from './chart-types';
 import { resultDomain, sigmaLines } from './distribution-geometry';
 import { clampSide, type Clamped } from './score-scale';
+import { placeEdgeValues } from './spread-labels';
 
-export type RoundBar = { point: ResultPoint; x: number; y: number; clamped: Clamped };
+export type RoundBar = { point: ResultPoint; x: number; y: number; clamped: Clamped; valueX: number };
 
-const MARGIN = { left: 58, right: 52, top: 26, bottom: 34 };
+const MARGIN = { left: 58, right: 52, top: 30, bottom: 24 };
+const VALUE_ROOM = 34;
+const LABEL_GAP = 14;
 
 export function roundBarsGeometry(
   input: { results: readonly ResultPoint[]; assigned: AssignedValue },
@@ -18,8 +21,10 @@ export function roundBarsGeometry(
     results.map((result) => result.value),
     assigned,
   );
-  const bottom = height - MARGIN.bottom;
-  const y = scaleLinear<number>({ domain: [low, high], range: [bottom, MARGIN.top] });
+  const sides = results.map((result) => clampSide(result.value, low, high));
+  const top = MARGIN.top + (sides.includes(1) ? VALUE_ROOM : 0);
+  const bottom = height - MARGIN.bottom - (sides.includes(-1) ? VALUE_ROOM : 0);
+  const y = scaleLinear<number>({ domain: [low, high], range: [bottom, top] });
   const x = scalePoint<number>({
     domain: results.map((_, index) => index),
     range: [MARGIN.left, width - MARGIN.right],
@@ -29,8 +34,10 @@ export function roundBarsGeometry(
     point,
     x: px(x(index) ?? 0),
     y: px(y(Math.max(low, Math.min(high, point.value)))),
-    clamped: clampSide(point.value, low, high),
+    clamped: sides[index] ?? 0,
+    valueX: px(x(index) ?? 0),
   }));
+  placeEdgeValues(bars, (bar) => bar.x, LABEL_GAP, [MARGIN.left + 4, width - MARGIN.right]);
   return {
     y,
     bars,

@@ -5,7 +5,8 @@ import { MOST_MARKS, type ChartSize } from './chart-size';
 import { ChartInTwoSizes } from './chart-svg';
 import type { AssignedValue, ResultPoint } from './chart-types';
 import { describeResults, signalWords } from './describe';
-import { EdgeArrow, Mark, ResultShape, SignalShape } from './marks';
+import { EdgeValue } from './edge-value';
+import { Mark, ResultShape, SignalShape } from './marks';
 import { roundBarsGeometry, type RoundBar } from './round-bars-geometry';
 import { SigmaLabel } from './sigma-label';
 
@@ -103,7 +104,13 @@ function Drawing({
             <ResultShape signal={bar.point.signal} x={bar.x} y={bar.y} size={markSize} />
           )}
           {bar.clamped !== 0 && (
-            <BeyondEdge bar={bar} right={right} text={formatNumber(bar.point.value, decimals)} />
+            <EdgeValue
+              x={bar.x}
+              y={bar.y + (bar.clamped === 1 ? -6 : 6)}
+              labelX={bar.valueX}
+              text={formatNumber(bar.point.value, decimals)}
+              up={bar.clamped === 1}
+            />
           )}
         </Mark>
       ))}
@@ -138,26 +145,6 @@ function OwnBar({ bar, assignedY, markSize }: { bar: RoundBar; assignedY: number
         strokeWidth="3"
       >
         {bar.point.code} own
-      </text>
-    </>
-  );
-}
-
-/** The value stands beside the arrow, on the side where there is room for it. */
-function BeyondEdge({ bar, right, text }: { bar: RoundBar; right: number; text: string }) {
-  const outward = bar.clamped === 1 ? -1 : 1;
-  const toLeft = bar.x > right / 2;
-  return (
-    <>
-      <EdgeArrow x={bar.x} y={bar.y + outward * 10} direction={outward < 0 ? 'up' : 'down'} />
-      <text
-        x={bar.x + (toLeft ? -9 : 9)}
-        y={bar.y}
-        dy="0.35em"
-        textAnchor={toLeft ? 'end' : 'start'}
-        className="fill-ink"
-      >
-        {text}
       </text>
     </>
   );

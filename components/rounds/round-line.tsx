@@ -1,21 +1,12 @@
 import Link from 'next/link';
 import type { ReactNode } from 'react';
 import { layOutRoundLine, type RoundLineLayout } from '@/components/charts/round-line-geometry';
+import { StageMark } from '@/components/charts/round-line-marks';
+import { StageBlockers, StageWords, type RoundStage } from '@/components/charts/round-line-words';
 import { cx } from '@/components/ui/cx';
-import { OpenTriangle } from '@/components/ui/shapes';
-import { daysBetween, formatDate, formatRelativeDays } from '@/lib/format';
-import { StageMark } from '@/components/ui/stage-mark';
+import { formatDate } from '@/lib/format';
 
-export type StageState = 'done' | 'current' | 'due' | 'overdue' | 'later' | 'cancelled';
-export type StageBlocker = string | { text: string; href: string };
-export type RoundStage = {
-  key: string;
-  label: string;
-  href: string | null;
-  at: string | null;
-  state: StageState;
-  blockedBy?: readonly StageBlocker[];
-};
+export type { RoundStage, StageBlocker, StageState } from '@/components/charts/round-line-words';
 export type RoundLineProps = { stages: readonly RoundStage[]; today: string; currentPlace: string };
 
 /** The stages of a round on one line in time. It is the way around a round and stands on each of its pages. */
@@ -28,7 +19,7 @@ export function RoundLine({ stages, today, currentPlace }: RoundLineProps) {
     <nav aria-label="Stages of the round" className="border-y py-3">
       <WideLine stages={stages} today={today} currentPlace={currentPlace} layout={layout} />
       <NarrowLine stages={stages} today={today} currentPlace={currentPlace} />
-      <Blockers stages={stages} />
+      <StageBlockers stages={stages} />
     </nav>
   );
 }
@@ -94,22 +85,23 @@ function NarrowLine({ stages, today, currentPlace }: RoundLineProps) {
   const here = stages.find((stage) => stage.key === currentPlace);
   return (
     // A new key for each place closes the list once a stage has been chosen.
-    <details key={currentPlace} className="md:hidden print:hidden">
-      <summary className="flex min-h-11 items-center gap-3">
+    <details key={currentPlace} className="group md:hidden print:hidden">
+      <summary className="flex min-h-11 list-none items-center gap-3 [&::-webkit-details-marker]:hidden">
         <span aria-hidden="true" className="relative flex gap-2.5">
           <span className="absolute inset-x-0 top-1/2 h-px bg-rule-strong" />
           {stages.map((stage) => (
-            <StageMark
-              key={stage.key}
-              state={stage.state}
-              className={cx(
-                'relative bg-paper',
-                stage.key === currentPlace && 'shadow-[0_5px_0_-1px_var(--maize)]',
+            <span key={stage.key} className="relative">
+              <StageMark state={stage.state} className="bg-paper" />
+              {stage.key === currentPlace && (
+                <span className="absolute inset-x-0 -bottom-1.5 h-0.75 bg-maize" />
               )}
-            />
+            </span>
           ))}
         </span>
         <span className="font-semibold">{here?.label ?? 'Stages'}</span>
+        <svg viewBox="0 0 12 8" aria-hidden="true" className="ml-auto w-3 stroke-press group-open:rotate-180">
+          <path d="m1 1 5 5 5-5" fill="none" strokeWidth="1.8" />
+        </svg>
         <span className="sr-only">, show all stages of the round</span>
       </summary>
       <ol className="mt-2 border-t">
@@ -178,61 +170,5 @@ function StageText({
         <StageWords stage={stage} today={today} />
       </span>
     </span>
-  );
-}
-
-function StageWords({ stage, today }: { stage: RoundStage; today: string }) {
-  const date = stage.at ? formatDate(stage.at) : '';
-  switch (stage.state) {
-    case 'done':
-      return <>{date ? `done ${date}` : 'done'}</>;
-    case 'current':
-      return <strong className="text-ink">{date ? `now; ${date}` : 'now'}</strong>;
-    case 'due':
-      return (
-        <span className="text-ink">{stage.at ? `due ${formatRelativeDays(stage.at, today)}` : 'due'}</span>
-      );
-    case 'overdue':
-      return <strong className="text-warning">{overdueWords(stage.at, today)}</strong>;
-    case 'cancelled':
-      return <>cancelled</>;
-    case 'later':
-      return <>{date || 'later'}</>;
-  }
-}
-
-function overdueWords(at: string | null, today: string): string {
-  const days = at ? -daysBetween(today, at) : 0;
-  if (days < 1) return 'overdue';
-  return `overdue by ${days === 1 ? 'a day' : `${days} days`}`;
-}
-
-function Blockers({ stages }: Pick<RoundLineProps, 'stages'>) {
-  const blocked = stages.filter((stage) => stage.blockedBy && stage.blockedBy.length > 0);
-  if (blocked.length === 0) return null;
-  return (
-    <div className="no-print mt-3 flex flex-col gap-1.5 text-sm">
-      {blocked.map((stage) => (
-        <div key={stage.key} className="flex flex-wrap items-baseline gap-x-2">
-          <span className="inline-flex items-baseline gap-1.5 font-semibold text-warning">
-            <OpenTriangle />
-            {stage.label} is held up
-          </span>
-          <ul className="flex flex-col">
-            {stage.blockedBy?.map((blocker, index) => (
-              <li key={index}>
-                {typeof blocker === 'string' ? (
-                  blocker
-                ) : (
-                  <Link href={blocker.href} className="text-link inline-flex min-h-6 items-center">
-                    {blocker.text}
-                  </Link>
-                )}
-              </li>
-            ))}
-          </ul>
-        </div>
-      ))}
-    </div>
   );
 }

@@ -65,4 +65,4 @@ export function FieldError({ id, error }: { id: string; error?: string }) {
 export const CONTROL_STYLE =
   'w-full min-h-11 rounded-xs border border-rule-strong bg-paper-raised px-3 py-1.5 text-ink ' +
   'placeholder:text-ink-faint aria-invalid:border-action aria-invalid:border-l-4 ' +
-  'disabled:bg-paper-wash disabled:text-ink-faint read-only:bg-paper-wash md:min-h-9';
+  'disabled:bg-paper-wash disabled:text-ink-faint [&[readonly]]:bg-paper-wash md:min-h-9';

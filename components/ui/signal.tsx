@@ -24,9 +24,11 @@ export function Signal({ score, signal, kind = 'z', compact, column, why }: Sign
   return (
     <span className={cx('inline-flex items-baseline gap-1.5', TEXT[signal])}>
       <span className="figures">{formatScore(score, kind)}</span>
-      <span className={cx('inline-flex items-baseline gap-1 text-left', column && slot(compact))}>
-        <SignalMark signal={signal} compact={compact} />
-      </span>
+      {(signal !== 'none' || column) && (
+        <span className={cx('inline-flex items-baseline text-left', column && slot(compact))}>
+          <SignalMark signal={signal} compact={compact} />
+        </span>
+      )}
     </span>
   );
 }

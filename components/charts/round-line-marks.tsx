@@ -1,9 +1,8 @@
-import { cx } from './cx';
-
-export type StageMarkState = 'done' | 'current' | 'due' | 'overdue' | 'later' | 'cancelled';
+import { cx } from '@/components/ui/cx';
+import type { StageState } from './round-line-words';
 
 /** The mark of a stage on the round line; its state is told by shape first. */
-export function StageMark({ state, className }: { state: StageMarkState; className?: string }) {
+export function StageMark({ state, className }: { state: StageState; className?: string }) {
   return (
     <svg viewBox="0 0 16 16" aria-hidden="true" className={cx('size-4 shrink-0 rounded-full', className)}>
       <Shape state={state} />
@@ -11,7 +10,7 @@ export function StageMark({ state, className }: { state: StageMarkState; classNa
   );
 }
 
-function Shape({ state }: { state: StageMarkState }) {
+function Shape({ state }: { state: StageState }) {
   switch (state) {
     case 'done':
       return <circle cx="8" cy="8" r="5.5" className="fill-ink" />;
