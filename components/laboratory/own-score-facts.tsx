@@ -1,0 +1,96 @@
+import { Facts, type Fact } from '@/components/ui/facts';
+import { Signal } from '@/components/ui/signal';
+import { formatCount, formatNumber, formatScore } from '@/lib/format';
+import type { OwnEntry } from './own-score-row';
+import { censoredText, whyNotScored } from './own-score-row';
+import { FINER } from './own-scores-table';
+import { SCORE_NAMES } from './score-names';
+
+const METHODS = {
+  'algorithm-a': 'robust mean of the participants (Algorithm A)',
+  median: 'median of the participants',
+  mean: 'mean of the participants',
+  stated: 'stated beforehand',
+};
+const RULES = {
+  prescribed: 'prescribed',
+  percent: 'a percentage of the assigned value',
+  horwitz: 'Horwitz function',
+  'horwitz-thompson': 'Horwitz function, modified by Thompson',
+  'robust-sd': 'robust standard deviation of this round',
+};
+
+/** The own result against the round: every figure that goes into the score. */
+export function OwnScoreFacts({ entry }: { entry: OwnEntry }) {
+  const { plan, evaluation, scored, censored } = entry;
+  const { assigned, sigmaPt, scoreKind } = evaluation;
+  const inUnit = (value: number | null, finer: number) =>
+    value === null ? '\u2013' : `${formatNumber(value, plan.decimals + finer)} ${plan.unit}`;
+  const own = scored
+    ? inUnit(scored.value, 0)
+    : censored
+      ? `${censoredText(censored, plan.decimals)} ${plan.unit}`
+      : 'nothing reported';
+  const facts: Fact[] = [
+    { label: 'Your result', value: own },
+    {
+      label: 'Assigned value x_pt',
+      value: inUnit(assigned.value, FINER.assigned),
+      hint: assigned.reason ?? `${METHODS[assigned.method]}${countWords(assigned.count)}`,
+    },
+    {
+      label: 'Standard uncertainty u(x_pt)',
+      value: inUnit(assigned.standardUncertainty, FINER.spread),
+    },
+    {
+      label: 'sigma_pt',
+      value: inUnit(sigmaPt.value, FINER.spread),
+      hint: sigmaPt.reason ?? RULES[sigmaPt.rule],
+    },
+    {
+      label: `Score ${SCORE_NAMES[scoreKind]}`,
+      value: (
+        <Signal
+          score={scored?.score ?? null}
+          signal={scored?.signal ?? 'not-scored'}
+          kind={scoreKind}
+          why={whyNotScored(scored, censored)}
+        />
+      ),
+      hint: scored?.score === null || !scored ? whyNotScored(scored, censored) : evaluation.scoreKindReason,
+    },
+    { label: 'Difference D', value: inUnit(scored?.D ?? null, 0) },
+    {
+      label: 'Difference D%',
+      value: typeof scored?.dPercent !== 'number' ? '\u2013' : `${formatNumber(scored.dPercent, 1)} %`,
+    },
+    ...otherScores(entry),
+  ];
+  return <Facts items={facts} columns={2} />;
+}
+
+/** Scores that were computed beside the judged one. */
+function otherScores({ evaluation, scored }: OwnEntry): Fact[] {
+  if (!scored) return [];
+  const all = { z: scored.z, 'z-prime': scored.zPrime, zeta: scored.zeta, 'e-n': scored.eN };
+  const facts: Fact[] = [];
+  for (const kind of ['z', 'z-prime', 'zeta', 'e-n'] as const) {
+    const value = all[kind];
+    if (kind === evaluation.scoreKind || value === null) continue;
+    facts.push({ label: `Beside it: ${SCORE_NAMES[kind]}`, value: formatScore(value, kind) });
+  }
+  if (scored.uncertaintyClass) {
+    facts.push({ label: 'Your stated uncertainty', value: UNCERTAINTY[scored.uncertaintyClass] });
+  }
+  return facts;
+}
+
+const UNCERTAINTY: Record<NonNullable<NonNullable<OwnEntry['scored']>['uncertaintyClass']>, string> = {
+  low: 'may be too small',
+  plausible: 'plausible',
+  high: 'may be too large',
+};
+
+function countWords(count: number): string {
+  return count > 0 ? `, ${formatCount(count, 'result')}` : '';
+}
