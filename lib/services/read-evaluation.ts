@@ -10,6 +10,7 @@ import {
 } from '@/db/evaluation-store';
 import { listRoundMeasurands, type RoundMeasurand } from '@/db/round-measurand-store';
 import { findRound, type Round } from '@/db/round-store';
+import { findUserName, listRoleHolders } from '@/db/views/round-people-view';
 import { notFound } from '@/lib/errors';
 import { can, laboratoriesOf } from '@/lib/rules/permissions';
 import type { Actor } from '@/lib/rules/roles';
@@ -64,4 +65,23 @@ export async function getVisibleEvaluation(actor: Actor, slug: string): Promise<
   const found = await findRoundEvaluation(db(), round);
   if (!found) throw notFound('The evaluation');
   return { ...found, ownCodes };
+}
+
+export interface PreparedEvaluation extends RoundEvaluation {
+  preparedByName: string | null;
+}
+
+/** The newest evaluation as the provider's staff sees it; null before the first. */
+export async function getPreparedEvaluation(slug: string): Promise<PreparedEvaluation | null> {
+  const round = await findRound(db(), slug);
+  if (!round) throw notFound('The round');
+  const found = await findRoundEvaluation(db(), round);
+  if (!found) return null;
+  return { ...found, preparedByName: await findUserName(db(), found.evaluation.createdBy) };
+}
+
+/** The people who may sign a version: reviewers who did not prepare it. */
+export async function listSigners(evaluation: Pick<Evaluation, 'createdBy'>): Promise<string[]> {
+  const reviewers = await listRoleHolders(db(), 'reviewer');
+  return reviewers.filter(({ id }) => id !== evaluation.createdBy).map(({ name }) => name);
 }
