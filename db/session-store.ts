@@ -1,13 +1,20 @@
 import 'server-only';
 import type { Db } from './connection';
 
+/** Begins with the laboratory that the person chose last. */
 export async function createSession(
   connection: Db,
   session: { id: string; userId: number; expiresAt: string },
 ): Promise<void> {
+  const last: { laboratory_id: number | null } | undefined = await connection('sessions')
+    .where({ user_id: session.userId })
+    .whereNotNull('laboratory_id')
+    .orderBy('created_at', 'desc')
+    .first('laboratory_id');
   await connection('sessions').insert({
     id: session.id,
     user_id: session.userId,
+    laboratory_id: last?.laboratory_id ?? null,
     created_at: new Date().toISOString(),
     expires_at: session.expiresAt,
   });

@@ -55,7 +55,7 @@ function MailTable({ mail, caption }: { mail: MailLine[]; caption: string }) {
         {mail.map((line) => (
           <tr key={line.id}>
             <Td className="figures">{formatDateTime(line.createdAt)}</Td>
-            <Td className="wrap-anywhere">{line.toAddress}</Td>
+            <Td className="min-w-48 wrap-anywhere">{line.toAddress}</Td>
             <Th scope="row" className="min-w-40 align-top">
               <Link href={`/admin/mail/${line.id}`} className="text-link">
                 {line.subject}

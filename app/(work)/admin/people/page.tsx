@@ -55,7 +55,7 @@ function PeopleTable({ people, caption }: { people: PersonLine[]; caption: strin
                 {person.name}
               </Link>
             </Th>
-            <Td className="wrap-anywhere">{person.email}</Td>
+            <Td className="min-w-48 wrap-anywhere">{person.email}</Td>
             <Td>
               <RoleList memberships={person.memberships} />
             </Td>

@@ -141,7 +141,7 @@ function People({ people, linked }: { people: ColleagueLine[]; linked: boolean }
                 person.name
               )}
             </Th>
-            <Td className="wrap-anywhere">{person.email}</Td>
+            <Td className="min-w-48 wrap-anywhere">{person.email}</Td>
             <Td>{person.roles.map((role) => ROLE_NAMES[role]).join(', ')}</Td>
             <Td>{accountState(person)}</Td>
           </tr>

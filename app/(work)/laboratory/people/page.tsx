@@ -51,7 +51,7 @@ function PersonRow({ person }: { person: Colleague }) {
       <Th scope="row" className="min-w-32 align-top font-semibold">
         {person.name}
       </Th>
-      <Td className="wrap-anywhere">{person.email}</Td>
+      <Td className="min-w-48 wrap-anywhere">{person.email}</Td>
       <Td>
         <ul>
           {person.roles.map((role) => (

@@ -66,7 +66,7 @@ function TokenTable({ tokens, now }: { tokens: Token[]; now: string }) {
       <tbody>
         {tokens.map((token) => (
           <tr key={token.id}>
-            <Th scope="row" className="min-w-32 font-semibold">
+            <Th scope="row" className="min-w-32 align-top font-semibold">
               {token.name}
             </Th>
             <Td className="font-mono text-sm">{token.lastFour}</Td>
