@@ -36,11 +36,11 @@ export function Th({ numeric, className, scope = 'col', ...rest }: ComponentProp
       {...rest}
       scope={scope}
       className={cx(
-        'px-3 py-1.5 align-bottom font-semibold first:pl-0 last:pr-0',
+        'px-3 py-1.5 first:pl-0 last:pr-0',
         // A border would scroll away under a sticky header; a shadow line moves with the cell.
         scope === 'col' &&
-          'sticky top-0 z-10 bg-paper text-sm text-ink-soft shadow-[inset_0_-1px_0_var(--rule-strong)]',
-        scope === 'row' && 'border-b font-normal',
+          'sticky top-0 z-10 bg-paper align-bottom text-sm font-semibold text-ink-soft shadow-[inset_0_-1px_0_var(--rule-strong)]',
+        scope === 'row' && 'border-b align-top font-normal',
         numeric && 'text-right',
         className,
       )}
