@@ -75,7 +75,7 @@ function findSeparator(text: string): Separator {
     if (told === null && HAS_CONTENT.test(line)) return chooseSeparator(line);
     start = end + 1;
   }
-  return ',';
+  return SEPARATORS.find((candidate) => text.includes(candidate)) ?? ',';
 }
 
 const isEmptyRow = (cells: readonly string[]): boolean => cells.every((cell) => cell.trim() === '');
