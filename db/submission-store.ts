@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 import { fromRow, toRow } from './rows';
 
@@ -53,7 +54,7 @@ export async function keepUpload(connection: Db, sha256: string, bytes: Uint8Arr
       sha256,
       bytes: Buffer.from(bytes),
       byte_count: bytes.byteLength,
-      created_at: new Date().toISOString(),
+      created_at: timestamp(),
     })
     .returning('id');
   return row.id;

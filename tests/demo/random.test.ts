@@ -1,5 +1,4 @@
 import { describe, expect, test } from 'vitest';
-import { at, withStoryClock } from '@/seeds/story/clock';
 import { streamFor } from '@/seeds/story/random';
 
 const COUNT = 20_000;
@@ -41,27 +40,5 @@ describe('streams', () => {
     expect(Math.abs(sd - 1)).toBeLessThan(0.08);
     const products = firsts.slice(1).map((value, index) => value * (firsts[index] ?? 0));
     expect(Math.abs(moments(products).mean)).toBeLessThan(0.12);
-  });
-});
-
-describe('the story clock', () => {
-  test('tells the moment inside, the real time outside, and goes when the work is done or fails', async () => {
-    const RealDate = Date;
-    await withStoryClock(async () => {
-      const told = await at('2024-02-29T08:30:00.000Z', async () => {
-        await new Promise((resolve) => setTimeout(resolve, 1));
-        return { text: new Date().toISOString(), number: Date.now(), other: new Date(0).getTime() };
-      });
-      expect(told).toEqual({
-        text: '2024-02-29T08:30:00.000Z',
-        number: RealDate.parse('2024-02-29T08:30:00.000Z'),
-        other: 0,
-      });
-      expect(new Date() instanceof RealDate).toBe(true);
-      expect(Math.abs(Date.now() - RealDate.now())).toBeLessThan(1_000);
-    });
-    expect(Date).toBe(RealDate);
-    await expect(withStoryClock(() => Promise.reject(new Error('failed')))).rejects.toThrow('failed');
-    expect(Date).toBe(RealDate);
   });
 });
