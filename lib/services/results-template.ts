@@ -3,7 +3,8 @@ import { db } from '@/db/connection';
 import { findEnrolment } from '@/db/enrolment-store';
 import { findRound } from '@/db/round-store';
 import { notFound } from '@/lib/errors';
-import { resultsTemplate } from '@/lib/results-file';
+import { resultsTemplate, wholeRoundTemplate } from '@/lib/results-file';
+import { listParticipants } from '@/db/views/participants-view';
 import { getRound } from './round-plan';
 import { getResultsPlan } from './results-plan';
 
@@ -21,7 +22,10 @@ export async function laboratoryTemplate(
   return resultsTemplate(await getResultsPlan(db(), round), { separator });
 }
 
-export async function wholeRoundTemplate(slug: string, separator: Separator): Promise<string> {
+/** The template of a whole round names its enrolled laboratories: ask for `round:see-key` first. */
+export async function roundTemplate(slug: string, separator: Separator): Promise<string> {
   const round = await getRound(slug);
-  return resultsTemplate(await getResultsPlan(db(), round, []), { separator });
+  const enrolled = (await listParticipants(db(), round.id)).filter((entry) => entry.state === 'enrolled');
+  const laboratories = enrolled.map((entry) => ({ id: entry.laboratoryId, name: entry.laboratoryName }));
+  return wholeRoundTemplate(await getResultsPlan(db(), round, laboratories), { separator });
 }
