@@ -22,6 +22,7 @@ export type OrderedScoresChartProps = {
   scoreName?: string;
   scoreKind?: ScoreKind;
   fileName?: string;
+  level?: 2 | 3 | 4;
 };
 
 /** The scores of a round in ascending order, one bar a participant code. */
@@ -31,6 +32,7 @@ export function OrderedScoresChart({
   scoreName = 'z',
   scoreKind = 'z',
   fileName = 'scores',
+  level,
 }: OrderedScoresChartProps) {
   const description = describeScores(points, scoreName, scoreKind);
   const scored = orderScores(points);
@@ -40,6 +42,7 @@ export function OrderedScoresChart({
   return (
     <ChartFigure
       title={title}
+      level={level}
       fileName={fileName}
       note={`Vertical axis: ${scoreName}.`}
       caption={

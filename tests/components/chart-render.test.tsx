@@ -125,6 +125,20 @@ describe('DistributionChart', () => {
     expect(html).toMatch(/<text[^>]*class="fill-ink">18\.90<\/text>/);
   });
 
+  it('describes a single result without a range', () => {
+    const single = renderToStaticMarkup(
+      <DistributionChart title="Results" results={results.slice(0, 1)} {...measured} />,
+    );
+    expect(single).toContain('1 result, 9.50 \u00b5g/kg; assigned value 10.00');
+  });
+
+  it('takes the level of its heading from the page', () => {
+    expect(html).toMatch(/<h2 id=/);
+    expect(
+      renderToStaticMarkup(<DistributionChart title="R" results={results} level={3} {...measured} />),
+    ).toMatch(/<h3 id=/);
+  });
+
   it('does not claim a bandwidth for a curve it was given', () => {
     const given = renderToStaticMarkup(
       <DistributionChart title="Results" results={results} density={[{ x: 9, y: 1 }]} {...measured} />,
