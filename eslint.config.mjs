@@ -11,7 +11,11 @@ const config = [
       '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
       'no-restricted-properties': [
         'error',
-        { object: 'Math', property: 'random', message: 'Pass in a seeded generator, or use node:crypto for secrets.' },
+        {
+          object: 'Math',
+          property: 'random',
+          message: 'Pass in a seeded generator, or use node:crypto for secrets.',
+        },
       ],
       eqeqeq: ['error', 'always'],
     },
