@@ -124,7 +124,7 @@ function People({ people, linked }: { people: ColleagueLine[]; linked: boolean }
       <thead>
         <tr>
           <Th>Name</Th>
-          <Th>E-mail</Th>
+          <Th className="hidden md:table-cell">E-mail</Th>
           <Th>Roles</Th>
           <Th>Account</Th>
         </tr>
@@ -140,8 +140,11 @@ function People({ people, linked }: { people: ColleagueLine[]; linked: boolean }
               ) : (
                 person.name
               )}
+              <span className="block text-sm font-normal text-ink-soft wrap-anywhere md:hidden">
+                {person.email}
+              </span>
             </Th>
-            <Td className="min-w-48 wrap-anywhere">{person.email}</Td>
+            <Td className="hidden wrap-anywhere md:table-cell">{person.email}</Td>
             <Td>{person.roles.map((role) => ROLE_NAMES[role]).join(', ')}</Td>
             <Td>{accountState(person)}</Td>
           </tr>
