@@ -25,7 +25,7 @@ export function ReportTable({ caption, evaluation, plan }: ReportTableProps) {
           <Th numeric>Result ({plan.unit})</Th>
           <Th numeric>D ({plan.unit})</Th>
           <Th numeric>D%</Th>
-          <Th numeric className="pr-24.5">
+          <Th numeric className="pr-24.5!">
             {SCORE_NAMES[scoreKind]}
           </Th>
         </tr>

@@ -27,12 +27,12 @@ export type RoundTableProps = {
 
 export function RoundTable({ caption, hideCaption = true, rounds, hideScheme }: RoundTableProps) {
   return (
-    <Table caption={caption} hideCaption={hideCaption} fullHeight>
+    <Table caption={caption} hideCaption={hideCaption} fullHeight className="md:table-fixed">
       <thead>
         <tr>
-          <Th>Round</Th>
-          {!hideScheme && <Th>Scheme</Th>}
-          <Th>State</Th>
+          <Th className="md:w-1/4">Round</Th>
+          {!hideScheme && <Th className="hidden md:table-cell md:w-1/5">Scheme</Th>}
+          <Th className="md:w-1/5">State</Th>
           <Th>Results due</Th>
           <Th>Publication</Th>
           <Th numeric>Results sent</Th>
@@ -45,9 +45,12 @@ export function RoundTable({ caption, hideCaption = true, rounds, hideScheme }: 
               <Link href={`/rounds/${round.slug}`} className="text-link font-semibold">
                 {round.name}
               </Link>
+              {!hideScheme && (
+                <span className="block text-sm text-ink-soft md:hidden">{round.schemeName}</span>
+              )}
             </Th>
             {!hideScheme && (
-              <Td>
+              <Td className="hidden md:table-cell">
                 <Link href={`/schemes/${round.schemeSlug}`} className="text-link">
                   {round.schemeName}
                 </Link>

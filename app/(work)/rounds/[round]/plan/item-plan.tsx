@@ -88,12 +88,12 @@ function MeasurandRow({
       </Th>
       <Td>{entry.unit}</Td>
       <Td numeric>{entry.replicates}</Td>
-      <Td>
+      <Td className="min-w-40">
         {assignedWords(entry, entry.unit)}
         {entry.statedSource && <span className="block text-sm text-ink-soft">{entry.statedSource}</span>}
       </Td>
-      <Td>{sigmaWords(entry, entry.unit)}</Td>
-      <Td>{scoreWords(entry)}</Td>
+      <Td className="min-w-40">{sigmaWords(entry, entry.unit)}</Td>
+      <Td className="min-w-40">{scoreWords(entry)}</Td>
       {isDraft && (
         <Td className="text-right whitespace-nowrap">
           <MeasurandPlanDialog

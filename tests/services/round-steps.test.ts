@@ -1,0 +1,104 @@
+import { expect, it } from 'vitest';
+import { addRound, dropTestItem, getRound, getRoundPlan } from '@/lib/services/round-plan';
+import { getRoundOverview } from '@/lib/services/round-overview';
+import { enrolLaboratories } from '@/lib/services/enrolments';
+import { evaluateRound } from '@/lib/services/evaluate-round';
+import { cancelRound, closeRound, openRound, publishRound } from '@/lib/services/round-steps';
+import { testDatabase } from '../db/test-database';
+import { addLaboratory, addPerson } from './people-fixture';
+import { inDays, loadResults, logOf, openWithLaboratories, planRound, ROUND } from './round-fixture';
+
+it('does not open a round without an item, and says where to mend it', async () => {
+  const db = await testDatabase();
+  const { coordinator, scheme } = await planRound(db);
+  const { slug } = await addRound(coordinator, scheme, { ...ROUND, name: 'Empty' });
+  expect((await getRoundOverview(slug)).blockers).toEqual([
+    { text: 'The plan has no test item yet.', href: '/rounds/empty/plan' },
+  ]);
+  await expect(openRound(coordinator, slug)).rejects.toMatchObject({
+    code: 'blocked',
+    userMessage: 'The plan has no test item yet.',
+  });
+});
+
+it('does not open a round whose close has passed, unless it is a past round', async () => {
+  const db = await testDatabase();
+  const dates = {
+    opensAt: inDays(-60),
+    dispatchAt: inDays(-50),
+    closesAt: inDays(-30),
+    publishAt: inDays(-20),
+  };
+  const { coordinator, scheme, round } = await planRound(db, dates);
+  await expect(openRound(coordinator, round)).rejects.toMatchObject({ code: 'blocked' });
+  const { slug } = await addRound(coordinator, scheme, { ...ROUND, ...dates, name: 'Old', isPast: true });
+  expect((await getRoundOverview(slug)).blockers.map(({ href }) => href)).toEqual(['/rounds/old/plan']);
+});
+
+it.each([
+  { isPast: false, subjects: ['Maize 1 is open for results'] },
+  { isPast: true, subjects: [] },
+])('writes to enrolled laboratories when it opens ($isPast: past round)', async ({ isPast, subjects }) => {
+  const db = await testDatabase();
+  const { coordinator, round } = await planRound(db, { isPast });
+  const laboratoryId = await addLaboratory(db, 'Mill 1');
+  await addPerson(db, { name: 'Mira Voss', roles: [['lab_manager', laboratoryId]] });
+  await enrolLaboratories(coordinator, round, [laboratoryId], 'enrolled');
+  await openRound(coordinator, round);
+  const mail: { subject: string }[] = await db('outbox').select('subject');
+  expect(mail.map(({ subject }) => subject)).toEqual(subjects);
+});
+
+it('takes each step only from the state before it', async () => {
+  const db = await testDatabase();
+  const { coordinator, round } = await planRound(db);
+  for (const step of [closeRound, evaluateRound, publishRound]) {
+    await expect(step(coordinator, round)).rejects.toMatchObject({
+      code: 'blocked',
+      userMessage: expect.stringContaining('this step does not apply now'),
+    });
+  }
+  await openRound(coordinator, round);
+  await expect(openRound(coordinator, round)).rejects.toMatchObject({ code: 'blocked' });
+});
+
+it('closes only when someone has sent results, and evaluates only what has a number', async () => {
+  const db = await testDatabase();
+  const planned = await openWithLaboratories(db, 2);
+  const { coordinator, round } = planned;
+  await expect(closeRound(coordinator, round)).rejects.toMatchObject({
+    userMessage: 'No laboratory has sent results yet.',
+  });
+  await loadResults(planned, ['<2', '<5']);
+  await closeRound(coordinator, round);
+  await expect(evaluateRound(coordinator, round)).rejects.toMatchObject({
+    userMessage: expect.stringContaining('M1 AFT has no numeric result'),
+  });
+});
+
+it('keeps a cancelled round with its reason and tells the participants of an open one', async () => {
+  const db = await testDatabase();
+  const { coordinator, round, laboratoryIds } = await openWithLaboratories(db, 1);
+  await addPerson(db, { name: 'Mira Voss', roles: [['lab_manager', laboratoryIds[0] ?? 0]] });
+  await cancelRound(coordinator, round, 'The material was not stable.');
+  expect(await getRound(round)).toMatchObject({
+    state: 'cancelled',
+    cancelReason: 'The material was not stable.',
+  });
+  const mail: { subject: string; body: string }[] = await db('outbox').select('subject', 'body');
+  expect(mail.map(({ subject }) => subject)).toContain('Maize 1 is cancelled');
+  expect(mail.some(({ body }) => body.includes('The material was not stable.'))).toBe(true);
+  await expect(openRound(coordinator, round)).rejects.toMatchObject({ code: 'blocked' });
+  expect((await logOf(db)).at(-1)).toBe('round.cancelled');
+});
+
+it('leaves no trace of a step that was refused', async () => {
+  const db = await testDatabase();
+  const { coordinator, round } = await planRound(db);
+  const { items } = await getRoundPlan(round);
+  await dropTestItem(coordinator, round, items[0]?.id ?? 0);
+  const before = await logOf(db);
+  await expect(openRound(coordinator, round)).rejects.toMatchObject({ code: 'blocked' });
+  expect(await logOf(db)).toEqual(before);
+  expect(await getRound(round)).toMatchObject({ state: 'draft', openedAt: null });
+});
