@@ -17,14 +17,9 @@ export async function runVitest(project) {
       ...['--reporter', 'default', '--reporter', 'json'],
       ...['--outputFile.json', report],
     ],
-    { env: { NODE_ENV: 'test', TZ: 'UTC', ...colours() }, isShown: true },
+    { env: { NODE_ENV: 'test', TZ: 'UTC' }, isShown: true },
   );
   return countTests(readJson(report), code);
-}
-
-/** The output passes through a pipe, where vitest cannot see whether a person watches. */
-function colours() {
-  return process.stdout.isTTY ? { FORCE_COLOR: '1' } : { NO_COLOR: '1', FORCE_COLOR: undefined };
 }
 
 /** A file that cannot be loaded holds no test to count, so it counts as one failure; so does a run that ends badly. */
