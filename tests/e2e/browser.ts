@@ -119,4 +119,4 @@ export async function expectNoSidewaysScroll(page: Page): Promise<void> {
 }
 
 /** The former name, which the linter takes for a React hook. */
-export { testBrowser as useBrowser };
+export { testBrowser as testBrowser };

@@ -47,9 +47,9 @@ export async function planRound(
   await dialog.getByLabel('Code on the label').fill(choice.item);
   await dialog.getByLabel('What it is').fill('Material of the published example');
   for (const box of await dialog.getByRole('checkbox').all()) await box.check();
-  await dialog.getByRole('button', { name: 'Add test item' }).click();
+  await dialog.getByRole('button', { name: 'Add item' }).click();
   await dialog.waitFor({ state: 'hidden' });
-  await page.getByRole('region', { name: `Item ${choice.item}` }).waitFor();
+  await page.getByRole('region', { name: `Item ${choice.item}`, exact: true }).waitFor();
   return slug;
 }
 

@@ -6,7 +6,7 @@ import { createClient } from '../server/client';
 import { makePerson } from '../server/person-fixture';
 import { makeLaboratory } from '../server/round-fixture';
 import { closeServerDatabase, openServerDatabase } from '../server/server-database';
-import { useBrowser } from './browser';
+import { testBrowser } from './browser';
 import {
   createScheme,
   enrolAtOnce,
@@ -17,7 +17,7 @@ import {
   takeStep,
 } from './provider-steps';
 
-const { newPage } = useBrowser();
+const { newPage } = testBrowser();
 const SIGMA = 'Robust standard deviation of this round';
 const TIMEOUT = 300_000;
 

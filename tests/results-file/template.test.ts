@@ -20,7 +20,10 @@ test('the template of a whole round has the rows of the plan for each laboratory
   expect(lines).toHaveLength(5);
   expect(lines[3]).toBe('"South, harbour",M1,AFT,1,,ug/kg,,,,,,');
   const filled = text.replaceAll(/(M1,AFT,\d),,/g, '$1,12.5,');
-  const read = readResultsFile(new TextEncoder().encode(filled), PLAN, { kind: 'whole-round', today: '2026-12-01' });
+  const read = readResultsFile(new TextEncoder().encode(filled), PLAN, {
+    kind: 'whole-round',
+    today: '2026-12-01',
+  });
   expect(read.problems).toEqual([]);
   expect(read.results.map((row) => [row.laboratoryId, row.replicate, row.limitOrValue])).toEqual([
     [1, 1, 12.5],
@@ -31,5 +34,9 @@ test('the template of a whole round has the rows of the plan for each laboratory
 });
 
 test('without laboratories it has the rows once, with the laboratory left open', () => {
-  expect(wholeRoundTemplate({ ...PLAN, laboratories: [] }).trim().split('\r\n')).toHaveLength(3);
+  expect(
+    wholeRoundTemplate({ ...PLAN, laboratories: [] })
+      .trim()
+      .split('\r\n'),
+  ).toHaveLength(3);
 });
