@@ -117,6 +117,3 @@ export async function expectNoSidewaysScroll(page: Page): Promise<void> {
   }));
   expect(content, `width of ${page.url()}`).toBeLessThanOrEqual(window);
 }
-
-/** The former name, which the linter takes for a React hook. */
-export { testBrowser as testBrowser };
