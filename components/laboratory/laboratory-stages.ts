@@ -49,7 +49,9 @@ function items(part: OwnPart, now: string): RoundStage {
   if (part.itemsReceivedAt) return stage(part, 'items', 'Items received', 'done', part.itemsReceivedAt);
   if (!isRunning(part)) return stage(part, 'items', 'Items sent', 'done', part.dispatchAt);
   const isOnTheWay = part.state === 'open' && part.enrolmentState === 'enrolled' && part.dispatchAt <= now;
-  return stage(part, 'items', 'Items', isOnTheWay ? 'due' : 'later', part.dispatchAt);
+  return isOnTheWay
+    ? stage(part, 'items', 'Items', 'due', null)
+    : stage(part, 'items', 'Items', 'later', part.dispatchAt);
 }
 
 function results(part: OwnPart, now: string): RoundStage {

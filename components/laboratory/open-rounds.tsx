@@ -32,9 +32,9 @@ export function OpenRounds({ rounds, now }: OpenRoundsProps) {
           <tbody>
             {rounds.map((round) => (
               <tr key={round.slug}>
-                <Th scope="row">
+                <Th scope="row" className="align-top">
                   <span className="font-semibold">{round.name}</span>
-                  <span className="block text-sm text-ink-soft">{round.schemeName}</span>
+                  <span className="block text-sm font-normal text-ink-soft">{round.schemeName}</span>
                 </Th>
                 <Td className="figures">{formatDate(round.dispatchAt)}</Td>
                 <Td className="figures">

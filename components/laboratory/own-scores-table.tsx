@@ -36,29 +36,34 @@ export function OwnScoresTable({ round, rows }: OwnScoresTableProps) {
       <thead>
         <tr>
           <Th>Measurand</Th>
+          <Th numeric className="pr-24.5">
+            Score
+          </Th>
           <Th numeric>Your result</Th>
           <Th numeric>x_pt</Th>
           <Th numeric>u(x_pt)</Th>
           <Th numeric>sigma_pt</Th>
           <Th>Unit</Th>
           <Th numeric>D%</Th>
-          <Th numeric className="pr-24.5">
-            Score
-          </Th>
-          <Th>
-            <span className="sr-only">More</span>
-          </Th>
         </tr>
       </thead>
       <tbody>
         {rows.map((row) => (
           <tr key={row.roundMeasurandId}>
-            <Th scope="row">
-              <span className="font-semibold">
+            <Th scope="row" className="align-top">
+              <Link
+                href={`/laboratory/rounds/${round}/scores/${row.roundMeasurandId}`}
+                className="text-link relative inline-flex min-h-6 items-center whitespace-nowrap"
+              >
                 {row.item} {row.code}
-              </span>
-              <span className="block text-sm text-ink-soft">{row.name}</span>
+                <span className="sr-only">: where it stands</span>
+              </Link>
+              <span className="block text-sm font-normal text-ink-soft">{row.name}</span>
             </Th>
+            <Td numeric className="whitespace-nowrap">
+              <span className="mr-2 text-sm text-ink-soft">{SCORE_NAMES[row.scoreKind]}</span>
+              <Signal score={row.score} signal={row.signal} kind={row.scoreKind} why={row.why} column />
+            </Td>
             <NumberCell value={plainResult(row)} decimals={row.decimals} />
             <NumberCell value={row.assigned} decimals={row.decimals + FINER.assigned} />
             <NumberCell value={row.assignedUncertainty} decimals={row.decimals + FINER.spread} />
@@ -66,21 +71,6 @@ export function OwnScoresTable({ round, rows }: OwnScoresTableProps) {
             <Td>{row.unit}</Td>
             <Td numeric>
               <Figures value={row.dPercent} decimals={1} />
-            </Td>
-            <Td numeric>
-              <span className="mr-2 text-sm text-ink-soft">{SCORE_NAMES[row.scoreKind]}</span>
-              <Signal score={row.score} signal={row.signal} kind={row.scoreKind} why={row.why} column />
-            </Td>
-            <Td>
-              <Link
-                href={`/laboratory/rounds/${round}/scores/${row.roundMeasurandId}`}
-                className="text-link inline-flex min-h-6 items-center whitespace-nowrap"
-              >
-                Where it stands
-                <span className="sr-only">
-                  : {row.item} {row.code}
-                </span>
-              </Link>
             </Td>
           </tr>
         ))}

@@ -38,14 +38,14 @@ export function PastRounds({ rounds }: { rounds: readonly PastRound[] }) {
         <tbody>
           {rounds.map((round) => (
             <tr key={round.slug}>
-              <Th scope="row">
+              <Th scope="row" className="align-top">
                 <Link
                   href={`/laboratory/rounds/${round.slug}`}
                   className="text-link inline-flex min-h-6 items-center font-semibold"
                 >
                   {round.name}
                 </Link>
-                <span className="block text-sm text-ink-soft">{round.schemeName}</span>
+                <span className="block text-sm font-normal text-ink-soft">{round.schemeName}</span>
               </Th>
               <Td className="figures">{formatDate(round.closesAt)}</Td>
               <Td>

@@ -29,7 +29,7 @@ export function ReceiptList({ round, receipts }: ReceiptListProps) {
       <tbody>
         {receipts.map((receipt) => (
           <tr key={receipt.receiptCode} className={receipt.state === 'submitted' ? OWN_ROW : undefined}>
-            <Th scope="row" className="figures">
+            <Th scope="row" className="figures align-top">
               <Link
                 href={`/laboratory/rounds/${round}/receipts/${receipt.receiptCode}`}
                 className="text-link inline-flex min-h-6 items-center"

@@ -6,6 +6,7 @@ import { EmptyState } from '@/components/ui/empty-state';
 import { PageHeader } from '@/components/ui/page-header';
 import type { LaboratoryRound } from '@/db/views/laboratory-rounds-view';
 import { daysBetween, formatDate, formatDateTime, formatRelativeDays } from '@/lib/format';
+import { can } from '@/lib/rules/permissions';
 import { getDesk, type Desk } from '@/lib/services/laboratory-desk';
 import { NoLaboratory } from './no-laboratory';
 import { findOwnPlace } from './own-place';
@@ -27,7 +28,7 @@ export default async function LaboratoryPage() {
           when results are due, and your scores after publication. You will get an e-mail with the invitation.
         </EmptyState>
       ) : (
-        <DeskLists desk={desk} now={now} />
+        <DeskLists desk={desk} now={now} canAnswer={can(place.actor, 'own:enrol', place)} />
       )}
     </>
   );
@@ -39,14 +40,25 @@ function leadOf(desk: Desk, now: string): string {
   return waiting === 0 ? `${day}. Nothing waits for you today.` : `${day}. What waits for you stands first.`;
 }
 
-function DeskLists({ desk, now }: { desk: Desk; now: string }) {
+interface DeskListsProps {
+  desk: Desk;
+  now: string;
+  canAnswer: boolean;
+}
+
+function DeskLists({ desk, now, canAnswer }: DeskListsProps) {
   return (
     <>
       <DeskList
         id="invitations"
         title="Invitations to answer"
         entries={desk.invitations.map((round) =>
-          entryOf(round, 'Accept or decline', 'invitation', `results due ${formatDate(round.closesAt)}`),
+          entryOf(
+            round,
+            canAnswer ? 'Accept or decline' : 'See the invitation',
+            'invitation',
+            `results due ${formatDate(round.closesAt)}`,
+          ),
         )}
       />
       <DeskList
@@ -74,7 +86,7 @@ function DeskLists({ desk, now }: { desk: Desk; now: string }) {
         id="under-way"
         title="Under way"
         entries={desk.underWay.map((round) =>
-          entryOf(round, 'Open the round', undefined, underWayWords(round)),
+          entryOf(round, 'Open the round', undefined, underWayWords(round, now)),
         )}
       />
       <PastRounds rounds={desk.past} />
@@ -103,13 +115,13 @@ function DueWords({ closesAt, now }: { closesAt: string; now: string }) {
   );
 }
 
-function underWayWords(round: LaboratoryRound): string {
+function underWayWords(round: LaboratoryRound, now: string): string {
   if (round.state === 'draft') return `opens ${formatDate(round.opensAt)}`;
   const publication = `scores on ${formatDate(round.publishAt)}`;
   if (round.state !== 'open') return `under review, ${publication}`;
   if (round.enrolmentState === 'invited') return 'the invitation was not answered in time';
   if (round.receiptCode) return `results sent; can be amended until ${formatDateTime(round.closesAt)}`;
-  return round.closesAt <= new Date().toISOString()
+  return round.closesAt <= now
     ? `results were due ${formatDate(round.closesAt)}`
     : `items leave on ${formatDate(round.dispatchAt)}`;
 }

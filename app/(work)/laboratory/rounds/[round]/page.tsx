@@ -30,9 +30,9 @@ export default async function OwnRoundPage({ params }: PageProps<'/laboratory/ro
         <InvitationPart round={round} place={place} canAnswer={canAnswer(place)} now={now} />
       )}
       {round.state === 'published' ? (
-        <AfterPublication own={own} place={place} />
+        <AfterPublication own={own} place={place} now={now} />
       ) : (
-        <Before own={own} place={place} />
+        <Before own={own} place={place} now={now} />
       )}
       {round.instructions && (
         <Section id="instructions" title="Instructions from the provider">
@@ -76,22 +76,28 @@ function StateNotice({ own: { round }, now }: { own: OwnRound; now: string }) {
   return null;
 }
 
-function Before({ own, place }: { own: OwnRound; place: OwnPlace }) {
+interface PartsProps {
+  own: OwnRound;
+  place: OwnPlace;
+  now: string;
+}
+
+function Before({ own, place, now }: PartsProps) {
   return (
     <>
-      <ItemsPart own={own} laboratoryId={place.laboratoryId} />
-      <ResultsPart own={own} place={place} />
+      <ItemsPart own={own} laboratoryId={place.laboratoryId} now={now} />
+      <ResultsPart own={own} place={place} now={now} />
     </>
   );
 }
 
-async function AfterPublication({ own, place }: { own: OwnRound; place: OwnPlace }) {
+async function AfterPublication({ own, place, now }: PartsProps) {
   const scores = await findOwnScores(own.round.slug, place.laboratoryId);
   return (
     <>
       {scores && <ScoresPart scores={scores} />}
-      <ResultsPart own={own} place={place} />
-      <ItemsPart own={own} laboratoryId={place.laboratoryId} />
+      <ResultsPart own={own} place={place} now={now} />
+      <ItemsPart own={own} laboratoryId={place.laboratoryId} now={now} />
     </>
   );
 }

@@ -7,14 +7,14 @@ import { can } from '@/lib/rules/permissions';
 import type { OwnRound } from '@/lib/services/laboratory-round';
 import type { OwnPlace } from '../../own-place';
 
-export function ResultsPart({ own, place }: { own: OwnRound; place: OwnPlace }) {
+export function ResultsPart({ own, place, now }: { own: OwnRound; place: OwnPlace; now: string }) {
   const { round, receipts, whyNoResults } = own;
   const isOpen =
     whyNoResults === null && can(place.actor, 'own:submit', { laboratoryId: place.laboratoryId });
   if (!isOpen && receipts.length === 0 && round.enrolmentState !== 'enrolled') return null;
   if (round.state === 'draft') return null;
   return (
-    <Section id="results" title="Results" lead={<Lead own={own} isOpen={isOpen} />}>
+    <Section id="results" title="Results" lead={<Lead own={own} isOpen={isOpen} now={now} />}>
       {receipts.length > 0 && <ReceiptList round={round.slug} receipts={receipts} />}
       {isOpen && (
         <>
@@ -30,8 +30,13 @@ export function ResultsPart({ own, place }: { own: OwnRound; place: OwnPlace }) 
   );
 }
 
-function Lead({ own: { round, receipts, whyNoResults }, isOpen }: { own: OwnRound; isOpen: boolean }) {
-  const now = new Date().toISOString();
+interface LeadProps {
+  own: OwnRound;
+  isOpen: boolean;
+  now: string;
+}
+
+function Lead({ own: { round, receipts, whyNoResults }, isOpen, now }: LeadProps) {
   if (isOpen) {
     const until = `${formatDateTime(round.closesAt)}, ${formatRelativeDays(round.closesAt, now)}`;
     return receipts.length > 0

@@ -15,7 +15,7 @@ export function ScoresPart({ scores }: { scores: OwnScores }) {
     <Section
       id="scores"
       title="Scores"
-      lead={`Published on ${formatDate(round.publishedAt)}. Evaluation version ${version}, signed on ${formatDate(published.signedAt)}, statistics library ${libraryVersion}.`}
+      lead={`Published on ${formatDate(round.publishedAt)}. Evaluation version ${version}, signed on ${formatDate(published.signedAt)}, statistics library ${libraryVersion}. Open a measurand to see where your result stands among all codes.`}
     >
       <OwnScoresTable round={round.slug} rows={rows} />
       {worst && <SignalAdvice signal={worst} />}
