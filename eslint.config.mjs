@@ -4,7 +4,7 @@ import typescript from 'eslint-config-next/typescript';
 const config = [
   ...next,
   ...typescript,
-  { ignores: ['.next/**', 'node_modules/**', 'data/**', 'coverage/**', 'next-env.d.ts'] },
+  { ignores: ['.next/**', '.tmp/**', 'node_modules/**', 'data/**', 'coverage/**', 'next-env.d.ts'] },
   {
     rules: {
       '@typescript-eslint/no-explicit-any': 'error',

@@ -77,7 +77,7 @@ export async function signVersion(page: Page, slug: string, version: number): Pr
   await page.goto(`/rounds/${slug}/evaluation`);
   await page.getByLabel('Comment').first().fill('Read and redone by hand.');
   await page.getByRole('button', { name: `Sign version ${version}` }).click();
-  await expectText(page, 'Signed by');
+  await expectText(page, `Version ${version} is signed.`);
 }
 
 export async function expectText(page: Page, text: string): Promise<void> {
