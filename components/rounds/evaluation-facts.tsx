@@ -14,6 +14,7 @@ export type EvaluationFactsProps = {
 };
 
 const RATIO_DECIMALS = 3;
+const HORRAT_DECIMALS = 2;
 
 /** What the scores of a measurand rest on. */
 export function EvaluationFacts({ evaluation, plan, working }: EvaluationFactsProps) {
@@ -77,6 +78,15 @@ export function EvaluationFacts({ evaluation, plan, working }: EvaluationFactsPr
         ),
         { label: 'Score', value: SCORE_NAMES[evaluation.scoreKind], hint: evaluation.scoreKindReason },
         { label: 'Results', value: countWords(counts) },
+        ...(sigmaPt.horRat === null
+          ? []
+          : [
+              {
+                label: 'HorRat of sigma_pt',
+                value: formatNumber(sigmaPt.horRat, HORRAT_DECIMALS),
+                hint: 'sigma_pt divided by the Horwitz value at x_pt',
+              },
+            ]),
       ]}
     />
   );

@@ -123,6 +123,16 @@ function Nothing() {
   return <span className="text-grey">not yet</span>;
 }
 
+/** The same word stands in each row; read out, it says whom it is about. */
+function NamedLabel({ verb, who }: { verb: string; who: string }) {
+  return (
+    <>
+      {verb}
+      <span className="sr-only"> {who}</span>
+    </>
+  );
+}
+
 function Change({
   round,
   row,
@@ -142,7 +152,7 @@ function Change({
       <span className="inline-flex flex-wrap justify-end">
         {row.state === 'invited' && enrol && <Enrol fields={fields} who={who} enrol={enrol} />}
         <ConfirmDialog
-          triggerLabel="Withdraw"
+          triggerLabel={<NamedLabel verb="Withdraw" who={who} />}
           triggerVariant="quiet"
           triggerSize="small"
           title={`Withdraw ${who}`}
@@ -163,7 +173,7 @@ function Change({
 function Enrol({ fields, who, enrol }: { fields: Record<string, string>; who: string; enrol: Action }) {
   return (
     <ConfirmDialog
-      triggerLabel="Enrol"
+      triggerLabel={<NamedLabel verb="Enrol" who={who} />}
       triggerVariant="quiet"
       triggerSize="small"
       title={`Enrol ${who}`}

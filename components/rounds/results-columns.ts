@@ -80,7 +80,7 @@ export function resultsOfMeasurand(
   const all: (DataColumn & { of: (result: ResultOfCode) => string | number | null })[] = [
     { key: 'code', label: 'Code', kind: 'text', of: (result) => result.participantCode },
     { key: 'replicate', label: 'Replicate', kind: 'number', of: (result) => result.replicate },
-    { key: 'written', label: 'As written', kind: 'number', of: asWritten },
+    { key: 'written', label: 'As written', kind: 'text', of: asWritten },
     { key: 'value', label: `Result (${unit})`, kind: 'number', of: (result) => inPlanUnit(result, unit) },
     {
       key: 'U',

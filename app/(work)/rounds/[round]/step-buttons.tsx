@@ -52,7 +52,13 @@ export function StepButtons({ actor, overview }: { actor: Actor; overview: Round
         </ConfirmDialog>
       )}
       {mayStep && blockers.length === 0 && (
-        <NextStep step={next} facts={facts} now={now} action={ACTIONS[next].bind(null, null)} />
+        <NextStep
+          step={next}
+          facts={facts}
+          now={now}
+          publishAt={round.publishAt}
+          action={ACTIONS[next].bind(null, null)}
+        />
       )}
       {mayStep && blockers.length > 0 && (
         <div>

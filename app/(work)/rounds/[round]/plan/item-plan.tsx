@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { ItemDialog } from '@/components/forms/item-dialog';
-import { MeasurandPlanDialog, type MeasurandPlanValues } from '@/components/forms/measurand-plan-form';
+import { MeasurandPlanDialog } from '@/components/forms/measurand-plan-dialog';
+import type { MeasurandPlanValues } from '@/components/forms/measurand-plan-form';
 import { assignedWords, scoreWords, sigmaWords } from '@/components/rounds/plan-words';
 import { ConfirmDialog } from '@/components/ui/confirm-dialog';
 import { Table, Td, Th } from '@/components/ui/table';
