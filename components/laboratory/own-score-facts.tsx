@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { Facts, type Fact } from '@/components/ui/facts';
 import { Signal } from '@/components/ui/signal';
 import { formatCount, formatNumber, formatScore } from '@/lib/format';
@@ -20,8 +21,14 @@ const RULES = {
   'robust-sd': 'robust standard deviation of this round',
 };
 
+export type OwnScoreFactsProps = {
+  entry: OwnEntry;
+  /** A way to the working of each figure, beside it. */
+  workings: Record<'assigned' | 'uncertainty' | 'sigma', ReactNode>;
+};
+
 /** The own result against the round: every figure that goes into the score. */
-export function OwnScoreFacts({ entry }: { entry: OwnEntry }) {
+export function OwnScoreFacts({ entry, workings }: OwnScoreFactsProps) {
   const { plan, evaluation, scored, censored } = entry;
   const { assigned, sigmaPt, scoreKind } = evaluation;
   const inUnit = (value: number | null, finer: number) =>
@@ -35,16 +42,16 @@ export function OwnScoreFacts({ entry }: { entry: OwnEntry }) {
     { label: 'Your result', value: own },
     {
       label: 'Assigned value x_pt',
-      value: inUnit(assigned.value, FINER.assigned),
+      value: withWorking(inUnit(assigned.value, FINER.assigned), workings.assigned),
       hint: assigned.reason ?? `${METHODS[assigned.method]}${countWords(assigned.count)}`,
     },
     {
       label: 'Standard uncertainty u(x_pt)',
-      value: inUnit(assigned.standardUncertainty, FINER.spread),
+      value: withWorking(inUnit(assigned.standardUncertainty, FINER.spread), workings.uncertainty),
     },
     {
       label: 'sigma_pt',
-      value: inUnit(sigmaPt.value, FINER.spread),
+      value: withWorking(inUnit(sigmaPt.value, FINER.spread), workings.sigma),
       hint: sigmaPt.reason ?? RULES[sigmaPt.rule],
     },
     {
@@ -67,6 +74,15 @@ export function OwnScoreFacts({ entry }: { entry: OwnEntry }) {
     ...otherScores(entry),
   ];
   return <Facts items={facts} columns={2} />;
+}
+
+function withWorking(figure: string, working: ReactNode): ReactNode {
+  return (
+    <span className="inline-flex flex-wrap items-baseline justify-end gap-x-2">
+      {working}
+      {figure}
+    </span>
+  );
 }
 
 /** Scores that were computed beside the judged one. */

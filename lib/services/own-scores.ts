@@ -3,7 +3,8 @@ import { db } from '@/db/connection';
 import { findLaboratoryRound, type LaboratoryRound } from '@/db/views/laboratory-rounds-view';
 import { findRound } from '@/db/round-store';
 import { notFound } from '@/lib/errors';
-import type { CensoredScore, MeasurandEvaluation, ParticipantScore } from '@/lib/stats';
+import type { CensoredScore, MeasurandEvaluation, ParticipantScore, WorkingStep } from '@/lib/stats';
+import { getFigureWorking, type Figure } from './show-working';
 import { findRoundEvaluation, type EvaluatedPlan, type RoundEvaluation } from './read-evaluation';
 
 /** One measurand of a published round with the laboratory's own entry; null when it reported nothing for it. */
@@ -55,4 +56,15 @@ export async function getOwnEntry(
   const entry = scores?.entries.find(({ plan }) => plan.id === roundMeasurandId);
   if (!scores || !entry) throw notFound('The scores');
   return { ...scores, entry };
+}
+
+/** The working of a figure of a published round, for a participant. */
+export async function getOwnFigureWorking(
+  slug: string,
+  laboratoryId: number,
+  roundMeasurandId: number,
+  figure: Figure,
+): Promise<WorkingStep[]> {
+  await getOwnEntry(slug, laboratoryId, roundMeasurandId);
+  return getFigureWorking(slug, roundMeasurandId, figure);
 }

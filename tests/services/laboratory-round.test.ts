@@ -1,10 +1,11 @@
 import { describe, expect, it } from 'vitest';
 import { enrolLaboratories, moveEnrolment } from '@/lib/services/enrolments';
+import { evaluateRound } from '@/lib/services/evaluate-round';
 import { answerInvitation } from '@/lib/services/invitation-answers';
 import { getDesk } from '@/lib/services/laboratory-desk';
 import { getOwnRound } from '@/lib/services/laboratory-round';
 import { getTrend } from '@/lib/services/laboratory-trend';
-import { findOwnScores, getOwnEntry } from '@/lib/services/own-scores';
+import { findOwnScores, getOwnEntry, getOwnFigureWorking } from '@/lib/services/own-scores';
 import { cancelRound, closeRound } from '@/lib/services/round-steps';
 import { testDatabase } from '../db/test-database';
 import { at, csvOf, openWithManagers, publish, send } from './laboratory-fixture';
@@ -150,6 +151,24 @@ describe('own scores', () => {
     const id = idle?.entries[0]?.plan.id ?? 0;
     await expect(getOwnEntry(open.round, stranger, id)).rejects.toMatchObject({ code: 'not-found' });
     await expect(getOwnEntry(open.round, at(open, 0).laboratoryId, id + 1)).rejects.toMatchObject({
+      code: 'not-found',
+    });
+  });
+
+  it('open their working to participants, after publication', async () => {
+    const { db, open } = await published();
+    const [{ id }] = await db('round_measurands').select('id');
+    const own = at(open, 0).laboratoryId;
+    await closeRound(open.coordinator, open.round);
+    await evaluateRound(open.coordinator, open.round);
+    await expect(getOwnFigureWorking(open.round, own, id, 'assigned')).rejects.toMatchObject({
+      code: 'not-found',
+    });
+    await db('rounds').update({ state: 'published' });
+    const steps = await getOwnFigureWorking(open.round, own, id, 'assigned');
+    expect(steps.at(-1)).toMatchObject({ name: 'Assigned value x_pt' });
+    const stranger = await addLaboratory(db, 'Elsewhere');
+    await expect(getOwnFigureWorking(open.round, stranger, id, 'assigned')).rejects.toMatchObject({
       code: 'not-found',
     });
   });

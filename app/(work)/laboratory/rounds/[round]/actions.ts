@@ -1,9 +1,12 @@
 'use server';
 
 import { revalidatePath } from 'next/cache';
-import { formAction } from '@/lib/action';
+import * as z from 'zod';
+import { dataAction, formAction } from '@/lib/action';
 import { declineSchema, ownRoundSchema } from '@/lib/schemas/own-round';
 import { confirmReceipt } from '@/lib/services/enrolments';
+import { getOwnFigureWorking } from '@/lib/services/own-scores';
+import { FIGURES } from '@/lib/services/show-working';
 import { answerInvitation } from '@/lib/services/invitation-answers';
 
 const ofLaboratory = ({ laboratory }: { laboratory: number }) => ({ laboratoryId: laboratory });
@@ -36,4 +39,12 @@ export const confirmItemsAction = formAction({
     await confirmReceipt(actor, round, laboratory);
     revalidatePath('/laboratory', 'layout');
   },
+});
+
+export const ownFigureWorkingAction = dataAction({
+  permission: 'own:view',
+  subject: ofLaboratory,
+  schema: ownRoundSchema.extend({ measurand: z.number().int(), figure: z.enum(FIGURES) }),
+  run: ({ round, laboratory, measurand, figure }) =>
+    getOwnFigureWorking(round, laboratory, measurand, figure),
 });

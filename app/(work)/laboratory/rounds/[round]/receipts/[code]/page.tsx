@@ -1,6 +1,6 @@
 import { ReceiptFacts } from '@/components/laboratory/receipt-facts';
 import { ReceiptRows } from '@/components/laboratory/receipt-rows';
-import { PrintButton } from '@/components/laboratory/print-button';
+import { PrintButton } from '@/components/rounds/print-button';
 import { buttonStyle } from '@/components/ui/button-style';
 import { Notice } from '@/components/ui/notice';
 import { publicAddress } from '@/lib/env';

@@ -3,6 +3,7 @@ import { RoundBars } from '@/components/charts/round-bars';
 import { codesTable, resultPoints, scorePoints } from '@/components/laboratory/round-points';
 import { OwnScoreFacts } from '@/components/laboratory/own-score-facts';
 import { SCORE_NAMES } from '@/components/laboratory/score-names';
+import { FigureWorking } from '@/components/rounds/figure-working';
 import { SignalAdvice } from '@/components/laboratory/signal-advice';
 import { Caution } from '@/components/ui/caution';
 import { DataTable } from '@/components/ui/data-table';
@@ -12,6 +13,7 @@ import { getOwnEntry, type OwnEntry } from '@/lib/services/own-scores';
 import { NoLaboratory } from '../../../../no-laboratory';
 import { findOwn, findOwnPlace } from '../../../../own-place';
 import { RoundHead } from '../../round-head';
+import { ownFigureWorkingAction } from '../../actions';
 
 export const metadata = { title: 'Where the result stands' };
 
@@ -34,7 +36,7 @@ export default async function OwnScorePage({
         here="scores"
         title={`${plan.itemCode} ${plan.code}: ${plan.name}`}
       />
-      <OwnScoreFacts entry={entry} />
+      <OwnScoreFacts entry={entry} workings={workingsOf(entry, slug, place.laboratoryId)} />
       {(signal === 'warning' || signal === 'action') && <SignalAdvice signal={signal} />}
       <Charts entry={entry} ownCode={ownCode} />
       <DataTable
@@ -42,11 +44,32 @@ export default async function OwnScorePage({
         filterLabel="Filter codes"
         {...codesTable(entry.evaluation, plan, ownCode)}
       />
-      <Workings entry={entry} ownCode={ownCode} />
+      <OwnWorking entry={entry} ownCode={ownCode} />
       <Notes entry={entry} />
       <Caution kind="score" />
     </>
   );
+}
+
+const FIGURES = {
+  assigned: 'x_pt',
+  uncertainty: 'u(x_pt)',
+  sigma: 'sigma_pt',
+} as const;
+
+function workingsOf({ plan, evaluation }: OwnEntry, round: string, laboratory: number) {
+  const button = (figure: keyof typeof FIGURES) => (
+    <FigureWorking
+      title={FIGURES[figure]}
+      version={evaluation.libraryVersion}
+      load={ownFigureWorkingAction.bind(null, { round, laboratory, measurand: plan.id, figure })}
+    />
+  );
+  return {
+    assigned: evaluation.assigned.value !== null && button('assigned'),
+    uncertainty: evaluation.assigned.standardUncertainty !== null && button('uncertainty'),
+    sigma: evaluation.sigmaPt.value !== null && button('sigma'),
+  };
 }
 
 interface PartProps {
@@ -81,25 +104,14 @@ function Charts({ entry: { plan, evaluation }, ownCode }: PartProps) {
   );
 }
 
-function Workings({ entry: { evaluation, scored, censored }, ownCode }: PartProps) {
-  const version = evaluation.libraryVersion;
+function OwnWorking({ entry: { evaluation, scored, censored }, ownCode }: PartProps) {
+  if (!scored && !censored) return null;
   return (
-    <div>
-      {(scored ?? censored) && (
-        <Working
-          label="Show the working of your score"
-          steps={participantWorking(evaluation, ownCode)}
-          version={version}
-        />
-      )}
-      {evaluation.working && (
-        <Working
-          label="Show the working of x_pt, u(x_pt) and sigma_pt"
-          steps={evaluation.working}
-          version={version}
-        />
-      )}
-    </div>
+    <Working
+      label="Show the working of your score"
+      steps={participantWorking(evaluation, ownCode)}
+      version={evaluation.libraryVersion}
+    />
   );
 }
 
