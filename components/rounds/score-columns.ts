@@ -25,11 +25,14 @@ export function statisticDecimals(decimals: number): number {
   return decimals + 2;
 }
 
+const BINARY_ERROR = 1e-12;
+
 /** A result with the plan's decimals, and up to two more where the laboratory reported more. */
 export function resultText(value: number, decimals: number): string {
   for (let digits = decimals; digits < decimals + 2; digits += 1) {
     const text = formatPlainNumber(value, digits);
-    if (Number(text) === value) return text;
+    // The mean of replicates carries an error of binary fractions: 10.370000000000001 is 10.37.
+    if (Math.abs(Number(text) - value) <= BINARY_ERROR * Math.abs(value)) return text;
   }
   return formatPlainNumber(value, decimals + 2);
 }

@@ -142,6 +142,8 @@ it('shows results as written, and those of another unit with the plan unit first
 
 it('shows a result with the decimals of the plan, and more only where more were reported', () => {
   expect([0.23, 0.4246, 1 / 3].map((value) => resultText(value, 3))).toEqual(['0.230', '0.4246', '0.33333']);
+  expect(resultText((10.36 + 10.38) / 2, 2)).toBe('10.37');
+  expect(resultText(10.370000000000001, 2)).toBe('10.37');
 });
 
 it('names people of the provider and hides those of laboratories behind the code', () => {
