@@ -65,6 +65,9 @@ function consequences({ step, facts, now, publishAt }: Omit<NextStepProps, 'acti
           They are kept as a version that never changes. A reviewer other than you signs it before it can be
           published.
         </p>
+        {facts.measurandsWithoutResult.length > 0 && (
+          <p>Without a numeric result, and so without scores: {facts.measurandsWithoutResult.join(', ')}.</p>
+        )}
       </>
     );
   }

@@ -72,7 +72,7 @@ it('closes only when someone has sent results, and evaluates only what has a num
   await loadResults(planned, ['<2', '<5']);
   await closeRound(coordinator, round);
   await expect(evaluateRound(coordinator, round)).rejects.toMatchObject({
-    userMessage: expect.stringContaining('M1 AFT has no numeric result'),
+    userMessage: 'No measurand has a numeric result, so there is nothing to evaluate.',
   });
 });
 
