@@ -1,5 +1,6 @@
 import Link from 'next/link';
 import { OpenRounds } from '@/components/laboratory/open-rounds';
+import { RoundSketch } from '@/components/laboratory/round-sketch';
 import { ButtonLink } from '@/components/ui/button';
 import { db } from '@/db/connection';
 import { listOpenRounds } from '@/db/views/round-list-view';
@@ -11,26 +12,31 @@ export default async function FrontPage() {
   const [actor, rounds] = await Promise.all([currentActor(), listOpenRounds(db(), now)]);
   return (
     <>
-      <header className="flex max-w-prose flex-col gap-4 pt-4">
-        <h1>The same grain, measured blind in many laboratories</h1>
-        <p className="report-text text-lg">
-          A truck of maize is accepted or turned away on one figure. Assize is where laboratories learn how
-          far their figure is from the right one: a provider sends out the same material, every laboratory
-          reports under a code, and each is told where it stands, round after round.
-        </p>
-        <div className="flex flex-wrap gap-2">
-          {actor ? (
-            <ButtonLink href={homeOf(actor)} variant="primary">
-              Go on to your work, {actor.name}
-            </ButtonLink>
-          ) : (
-            <ButtonLink href="/sign-in" variant="primary">
-              Sign in
-            </ButtonLink>
-          )}
-          <ButtonLink href="/check">Check a receipt</ButtonLink>
+      <div className="flex flex-wrap items-center justify-between gap-x-16 gap-y-8 pt-4">
+        <header className="flex max-w-prose flex-1 basis-96 flex-col gap-4">
+          <h1>The same grain, measured blind in many laboratories</h1>
+          <p className="report-text text-lg">
+            A truck of maize is accepted or turned away on one figure. Assize is where laboratories learn how
+            far their figure is from the right one: a provider sends out the same material, every laboratory
+            reports under a code, and each is told where it stands, round after round.
+          </p>
+          <div className="flex flex-wrap gap-2">
+            {actor ? (
+              <ButtonLink href={homeOf(actor)} variant="primary">
+                Go on to your work, {actor.name}
+              </ButtonLink>
+            ) : (
+              <ButtonLink href="/sign-in" variant="primary">
+                Sign in
+              </ButtonLink>
+            )}
+            <ButtonLink href="/check">Check a receipt</ButtonLink>
+          </div>
+        </header>
+        <div className="w-full max-w-md">
+          <RoundSketch />
         </div>
-      </header>
+      </div>
       <OpenRounds rounds={rounds} now={now} />
       <div className="grid gap-x-12 gap-y-8 border-t pt-6 md:grid-cols-2">
         <ForLaboratories />
@@ -59,10 +65,12 @@ export default async function FrontPage() {
 function ForLaboratories() {
   return (
     <Part title="For a laboratory">
-      <li>See what is due: items to receive, results to send, scores to read.</li>
-      <li>Drop a CSV file as your system writes it, and see how every row was read before it counts.</li>
-      <li>Find your own bar among all codes, and your scores over the years.</li>
-      <li>Know what to look at first when there is a signal.</li>
+      <li className="border-b py-1.5">See what is due: items to receive, results to send, scores to read.</li>
+      <li className="border-b py-1.5">
+        Drop a CSV file as your system writes it, and see how every row was read before it counts.
+      </li>
+      <li className="border-b py-1.5">Find your own bar among all codes, and your scores over the years.</li>
+      <li className="border-b py-1.5">Know what to look at first when there is a signal.</li>
     </Part>
   );
 }
@@ -70,10 +78,14 @@ function ForLaboratories() {
 function ForProviders() {
   return (
     <Part title="For a provider">
-      <li>Plan a scheme and its rounds, enrol laboratories, give out random codes.</li>
-      <li>Watch results come in, and close, evaluate and sign off with a second pair of eyes.</li>
-      <li>Use estimates that a few bad results cannot spoil.</li>
-      <li>Publish once, with a record of who did what.</li>
+      <li className="border-b py-1.5">
+        Plan a scheme and its rounds, enrol laboratories, give out random codes.
+      </li>
+      <li className="border-b py-1.5">
+        Watch results come in, and close, evaluate and sign off with a second pair of eyes.
+      </li>
+      <li className="border-b py-1.5">Use estimates that a few bad results cannot spoil.</li>
+      <li className="border-b py-1.5">Publish once, with a record of who did what.</li>
     </Part>
   );
 }

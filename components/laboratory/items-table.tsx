@@ -23,7 +23,7 @@ export type ItemsTableProps = { items: readonly ItemRow[]; measurands: readonly 
 /** The test items as their labels name them, with what is to be measured in each. */
 export function ItemsTable({ items, measurands }: ItemsTableProps) {
   return (
-    <Table caption="Test items" hideCaption fullHeight>
+    <Table caption="Items and what to measure in them" hideCaption fullHeight>
       <thead>
         <tr>
           <Th>Item</Th>

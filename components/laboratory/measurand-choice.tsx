@@ -20,7 +20,9 @@ export function MeasurandChoice({ chosen, measurands }: MeasurandChoiceProps) {
         options={measurands.map(({ id, label }) => ({ value: String(id), label }))}
         className="max-w-full min-w-64"
       />
-      <Button type="submit">Show</Button>
+      <Button type="submit" className="mb-1">
+        Show
+      </Button>
     </form>
   );
 }

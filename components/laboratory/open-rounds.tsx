@@ -20,7 +20,7 @@ export function OpenRounds({ rounds, now }: OpenRoundsProps) {
       {rounds.length === 0 ? (
         <p className="text-ink-soft">No round is open at the moment. The next dates will stand here.</p>
       ) : (
-        <Table caption="Open rounds" hideCaption fullHeight>
+        <Table caption="Dates of the open rounds" hideCaption fullHeight>
           <thead>
             <tr>
               <Th>Round</Th>

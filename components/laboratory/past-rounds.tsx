@@ -26,7 +26,7 @@ export function PastRounds({ rounds }: { rounds: readonly PastRound[] }) {
           Results over time
         </Link>
       </div>
-      <Table caption="Past rounds" hideCaption>
+      <Table caption="Past rounds and your scores" hideCaption>
         <thead>
           <tr>
             <Th>Round</Th>

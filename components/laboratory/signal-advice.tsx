@@ -1,6 +1,10 @@
 import { FilledSquare, OpenTriangle } from '@/components/ui/shapes';
 
-export type SignalAdviceProps = { signal: 'warning' | 'action' };
+export type SignalAdviceProps = {
+  signal: 'warning' | 'action';
+  /** Level of the title among the headings of the page. */
+  level?: 2 | 3;
+};
 
 const CHECKS = [
   'The unit and the number of decimals in the file, against the unit of the plan.',
@@ -11,15 +15,16 @@ const CHECKS = [
 ];
 
 /** What a signal asks for: a look at the usual causes, by the laboratory's own procedure. */
-export function SignalAdvice({ signal }: SignalAdviceProps) {
+export function SignalAdvice({ signal, level = 3 }: SignalAdviceProps) {
+  const Heading = `h${level}` as const;
   const isAction = signal === 'action';
   const Shape = isAction ? FilledSquare : OpenTriangle;
   return (
     <section aria-label="What to do" className="max-w-prose border-y py-3">
-      <h3 className="flex items-baseline gap-2">
+      <Heading className="flex items-baseline gap-2 text-lg">
         <Shape />
         {isAction ? 'What to do about an action signal' : 'What to do about a warning signal'}
-      </h3>
+      </Heading>
       <p className="mt-1">
         {isAction
           ? 'Look for the cause now, and start a corrective action by your laboratory\u2019s own procedure.'

@@ -1,6 +1,6 @@
 import type { TrendPoint as ChartPoint } from '@/components/charts/chart-types';
 import type { DataColumn, DataRow } from '@/components/ui/data-table';
-import type { ScoreKind } from '@/lib/format';
+import { formatDate, type ScoreKind } from '@/lib/format';
 import { SCORE_NAMES } from './score-names';
 
 export interface TrendScore {
@@ -28,18 +28,23 @@ export function trendScoreName(points: readonly TrendScore[]): string {
   return kinds.length === 0 ? 'z' : kinds.map((kind) => SCORE_NAMES[kind]).join(', ');
 }
 
-/** The points of the chart, oldest first; a round with several items for the measurand gives one each. */
+/** The points of the chart, oldest first, labelled by month so that they fit; the round's name is in the note. */
 export function trendChartPoints(points: readonly TrendScore[]): ChartPoint[] {
-  const perRound = new Map<string, number>();
-  for (const { roundSlug } of points) perRound.set(roundSlug, (perRound.get(roundSlug) ?? 0) + 1);
-  const isMixed = new Set(points.filter(isOnTrendAxis).map((point) => point.scoreKind)).size > 1;
-  return points.filter(isOnTrendAxis).map((point) => ({
+  const onAxis = points.filter(isOnTrendAxis);
+  const isMixed = new Set(onAxis.map((point) => point.scoreKind)).size > 1;
+  return onAxis.map((point) => ({
     key: `${point.roundSlug}-${point.roundMeasurandId}`,
-    label: (perRound.get(point.roundSlug) ?? 1) > 1 ? `${point.roundName} ${point.item}` : point.roundName,
+    label: monthOf(point.closesAt),
     score: point.score,
     signal: point.signal,
-    note: isMixed ? SCORE_NAMES[point.scoreKind] : undefined,
+    note: [`${point.roundName}, item ${point.item}`, isMixed && SCORE_NAMES[point.scoreKind]]
+      .filter(Boolean)
+      .join('; '),
   }));
+}
+
+function monthOf(iso: string): string {
+  return formatDate(iso).replace(/^\d+ /, '');
 }
 
 export function trendTable(
@@ -48,13 +53,13 @@ export function trendTable(
 ): { columns: DataColumn[]; rows: DataRow[] } {
   const columns: DataColumn[] = [
     { key: 'round', label: 'Round', kind: 'link' },
+    { key: 'score', label: 'Score', kind: 'score' },
+    { key: 'kind', label: 'Kind', kind: 'text' },
     { key: 'closes', label: 'Results due', kind: 'date' },
     { key: 'item', label: 'Item', kind: 'text' },
     { key: 'value', label: `Your result in ${unit}`, kind: 'number', decimals },
     { key: 'assigned', label: 'x_pt', kind: 'number', decimals: decimals + 1 },
     { key: 'sigma', label: 'sigma_pt', kind: 'number', decimals: decimals + 2 },
-    { key: 'kind', label: 'Score', kind: 'text' },
-    { key: 'score', label: 'Value', kind: 'score' },
   ];
   // The newest round first: it is what a reader looks for.
   const rows = [...points].reverse().map((point) => ({

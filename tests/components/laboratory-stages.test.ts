@@ -99,16 +99,14 @@ describe('the trend', () => {
     signal: 'none',
   };
 
-  it('names the item when a round has two, and keeps a missing score missing', () => {
+  it('labels by month, names round and item, and keeps a missing score missing', () => {
     const points = trendChartPoints([
       SCORE,
       { ...SCORE, roundMeasurandId: 2, item: 'M2', score: null, signal: 'not-scored' },
-      { ...SCORE, roundSlug: 'r2', roundName: 'Round 2', roundMeasurandId: 3 },
     ]);
-    expect(points.map(({ label, score }) => [label, score])).toEqual([
-      ['Round 1 M1', -1],
-      ['Round 1 M2', null],
-      ['Round 2', -1],
+    expect(points.map(({ label, score, note }) => [label, score, note])).toEqual([
+      ['Dec 2026', -1, 'Round 1, item M1'],
+      ['Dec 2026', null, 'Round 1, item M2'],
     ]);
   });
 
@@ -116,6 +114,9 @@ describe('the trend', () => {
     const mixed: TrendScore[] = [SCORE, { ...SCORE, scoreKind: 'z-prime' }, { ...SCORE, scoreKind: 'e-n' }];
     expect(mixed.filter(isOnTrendAxis)).toHaveLength(2);
     expect(trendScoreName(mixed)).toBe("z, z'");
-    expect(trendChartPoints(mixed).map(({ note }) => note)).toEqual(['z', "z'"]);
+    expect(trendChartPoints(mixed).map(({ note }) => note)).toEqual([
+      'Round 1, item M1; z',
+      "Round 1, item M1; z'",
+    ]);
   });
 });

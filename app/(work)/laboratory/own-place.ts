@@ -14,8 +14,14 @@ export interface OwnPlace {
 /** The laboratory chosen in the header, after the rules allowed a look at it; null for people without one. */
 export async function findOwnPlace(): Promise<OwnPlace | null> {
   const { laboratoryId } = await requireActor();
-  if (laboratoryId === null) return null;
+  return laboratoryId === null ? null : requireOwnPlace();
+}
+
+/** The same for pages of one round, which someone without a laboratory does not find. */
+export async function requireOwnPlace(): Promise<OwnPlace> {
+  const { laboratoryId } = await requireActor();
   const actor = await requirePageActor('own:view', { laboratoryId });
+  if (laboratoryId === null) notFound();
   const own = laboratoriesOf(actor).find(({ id }) => id === laboratoryId);
   return { actor, laboratoryId, laboratoryName: own?.name ?? '' };
 }

@@ -5,8 +5,7 @@ import { Section } from '@/components/laboratory/section';
 import { can } from '@/lib/rules/permissions';
 import { getOwnRound, type OwnRound } from '@/lib/services/laboratory-round';
 import { findOwnScores } from '@/lib/services/own-scores';
-import { NoLaboratory } from '../../no-laboratory';
-import { findOwn, findOwnPlace, type OwnPlace } from '../../own-place';
+import { findOwn, requireOwnPlace, type OwnPlace } from '../../own-place';
 import { InvitationPart } from './invitation-part';
 import { ItemsPart } from './items-part';
 import { ResultsPart } from './results-part';
@@ -16,8 +15,7 @@ import { ScoresPart } from './scores-part';
 export const metadata = { title: 'Round' };
 
 export default async function OwnRoundPage({ params }: PageProps<'/laboratory/rounds/[round]'>) {
-  const place = await findOwnPlace();
-  if (!place) return <NoLaboratory />;
+  const place = await requireOwnPlace();
   const { round: slug } = await params;
   const now = new Date().toISOString();
   const own = await findOwn(place, `round ${slug}`, () => getOwnRound(slug, place.laboratoryId, now));

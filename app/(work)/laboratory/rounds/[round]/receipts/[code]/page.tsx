@@ -6,8 +6,7 @@ import { Notice } from '@/components/ui/notice';
 import { publicAddress } from '@/lib/env';
 import { formatDateTime } from '@/lib/format';
 import { getOwnReceipt } from '@/lib/services/receipts';
-import { NoLaboratory } from '../../../../no-laboratory';
-import { findOwn, findOwnPlace } from '../../../../own-place';
+import { findOwn, requireOwnPlace } from '../../../../own-place';
 import { RoundHead } from '../../round-head';
 
 export const metadata = { title: 'Receipt' };
@@ -16,8 +15,7 @@ export default async function ReceiptPage({
   params,
   searchParams,
 }: PageProps<'/laboratory/rounds/[round]/receipts/[code]'>) {
-  const place = await findOwnPlace();
-  if (!place) return <NoLaboratory />;
+  const place = await requireOwnPlace();
   const { round: slug, code } = await params;
   const { round, head, rows } = await findOwn(place, `receipt ${code} of ${slug}`, () =>
     getOwnReceipt(slug, place.laboratoryId, code),

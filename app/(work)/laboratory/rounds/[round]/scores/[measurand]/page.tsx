@@ -10,8 +10,7 @@ import { DataTable } from '@/components/ui/data-table';
 import { Working } from '@/components/ui/working';
 import { participantWorking } from '@/lib/stats';
 import { getOwnEntry, type OwnEntry } from '@/lib/services/own-scores';
-import { NoLaboratory } from '../../../../no-laboratory';
-import { findOwn, findOwnPlace } from '../../../../own-place';
+import { findOwn, requireOwnPlace } from '../../../../own-place';
 import { RoundHead } from '../../round-head';
 import { ownFigureWorkingAction } from '../../actions';
 
@@ -20,8 +19,7 @@ export const metadata = { title: 'Where the result stands' };
 export default async function OwnScorePage({
   params,
 }: PageProps<'/laboratory/rounds/[round]/scores/[measurand]'>) {
-  const place = await findOwnPlace();
-  if (!place) return <NoLaboratory />;
+  const place = await requireOwnPlace();
   const { round: slug, measurand } = await params;
   const { round, ownCode, entry } = await findOwn(place, `scores ${measurand} of ${slug}`, () =>
     getOwnEntry(slug, place.laboratoryId, Number(measurand)),
@@ -37,7 +35,7 @@ export default async function OwnScorePage({
         title={`${plan.itemCode} ${plan.code}: ${plan.name}`}
       />
       <OwnScoreFacts entry={entry} workings={workingsOf(entry, slug, place.laboratoryId)} />
-      {(signal === 'warning' || signal === 'action') && <SignalAdvice signal={signal} />}
+      {(signal === 'warning' || signal === 'action') && <SignalAdvice signal={signal} level={2} />}
       <Charts entry={entry} ownCode={ownCode} />
       <DataTable
         caption="All codes of the round"
@@ -119,7 +117,7 @@ function Notes({ entry: { evaluation } }: { entry: OwnEntry }) {
   if (evaluation.notes.length === 0) return null;
   return (
     <section aria-label="Notes on this evaluation" className="max-w-prose">
-      <h3>Notes on this evaluation</h3>
+      <h2 className="text-lg">Notes on this evaluation</h2>
       <ul className="mt-1 list-disc pl-5">
         {evaluation.notes.map((note) => (
           <li key={note}>{note}</li>
