@@ -1,5 +1,6 @@
 // @vitest-environment jsdom
 import { act, cleanup, fireEvent, render, screen } from '@testing-library/react';
+import { renderToString } from 'react-dom/server';
 import { afterEach, beforeEach, expect, it, vi } from 'vitest';
 import { UploadFile } from '@/components/upload/upload-file';
 
@@ -172,4 +173,16 @@ it('asks for one file at a time', async () => {
   });
   expect(screen.getByText('Found 2 files. Choose one file.')).toBeTruthy();
   expect(FakeRequest.all).toHaveLength(0);
+});
+
+it('takes a file that was chosen before the page listened', async () => {
+  const element = <UploadFile address="/api/x" kind="laboratory" texts={TEXTS} onTaken={() => {}} />;
+  const container = document.createElement('div');
+  document.body.append(container);
+  container.innerHTML = renderToString(element);
+  const field = container.querySelector('input');
+  if (!field) throw new Error('there is no file field');
+  Object.defineProperty(field, 'files', { value: [new File([CSV], 'early.csv')] });
+  await act(async () => void render(element, { container, hydrate: true }));
+  await vi.waitFor(() => expect(lastRequest().address).toContain('name=early.csv'));
 });
