@@ -36,7 +36,7 @@ const WORDS: Record<string, string> = {
   'evaluation.returned': 'returned the evaluation',
 };
 
-/** Who it was: people of the provider by name, people of a laboratory only by its code. */
+/** Who it was: people of the provider by name, people of a laboratory only by its code, or not even that. */
 export function whoWords(entry: LogEntry): string {
   if (entry.isStaff && entry.userName) return entry.userName;
   if (entry.participantCode === null) return 'Someone';
@@ -55,5 +55,7 @@ export function actionWords(entry: LogEntry): string {
   const words = WORDS[entry.action] ?? `did ${entry.action}`;
   if (!entry.action.startsWith('enrolment.')) return words;
   if (!entry.isStaff) return OWN_WORDS[entry.action] ?? words;
-  return `${words} participant ${entry.participantCode ?? ''}`;
+  return entry.participantCode === null
+    ? `${words} a participant`
+    : `${words} participant ${entry.participantCode}`;
 }

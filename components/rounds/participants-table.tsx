@@ -66,8 +66,8 @@ export function ParticipantsTable({ round, rows, withdraw, enrol }: Participants
             <Th>Code</Th>
             {showsNames && <Th>Laboratory</Th>}
             <Th>Enrolment</Th>
-            <Th>Items received</Th>
-            <Th>Results sent</Th>
+            {showsNames && <Th>Items received</Th>}
+            {showsNames && <Th>Results sent</Th>}
             {withdraw && (
               <Th>
                 <span className="sr-only">Change</span>
@@ -91,21 +91,7 @@ export function ParticipantsTable({ round, rows, withdraw, enrol }: Participants
                 <StateTag of="enrolment" state={row.state} />
                 {row.reason && <span className="block max-w-64 text-sm text-ink-soft">{row.reason}</span>}
               </Td>
-              <Td className="figures">
-                {row.itemsReceivedAt ? formatDateTime(row.itemsReceivedAt) : <Nothing />}
-              </Td>
-              <Td className="figures">
-                {row.submittedAt ? (
-                  <>
-                    {formatDateTime(row.submittedAt)}
-                    <span className="block text-sm text-ink-soft">
-                      {formatCount(row.resultCount ?? 0, 'result')}
-                    </span>
-                  </>
-                ) : (
-                  <Nothing />
-                )}
-              </Td>
+              {showsNames && <Progress row={row} />}
               {withdraw && (
                 <Td className="text-right">
                   <Change round={round} row={row} withdraw={withdraw} enrol={enrol} />
@@ -116,6 +102,24 @@ export function ParticipantsTable({ round, rows, withdraw, enrol }: Participants
         </tbody>
       </Table>
     </div>
+  );
+}
+
+function Progress({ row }: { row: ParticipantRow }) {
+  return (
+    <>
+      <Td className="figures">{row.itemsReceivedAt ? formatDateTime(row.itemsReceivedAt) : <Nothing />}</Td>
+      <Td className="figures">
+        {row.submittedAt ? (
+          <>
+            {formatDateTime(row.submittedAt)}
+            <span className="block text-sm text-ink-soft">{formatCount(row.resultCount ?? 0, 'result')}</span>
+          </>
+        ) : (
+          <Nothing />
+        )}
+      </Td>
+    </>
   );
 }
 
@@ -187,6 +191,7 @@ function Enrol({ fields, who, enrol }: { fields: Record<string, string>; who: st
 }
 
 function textOf(row: ParticipantRow): string {
+  if (row.laboratoryName === null) return `${row.participantCode} ${row.state}`;
   const sent = row.submittedAt ? 'sent' : 'not sent';
   return [row.participantCode, row.laboratoryName, row.town, row.state, sent].join(' ').toLowerCase();
 }
@@ -196,15 +201,13 @@ function asText(rows: readonly ParticipantRow[], showsNames: boolean): string {
     'Code',
     ...(showsNames ? ['Laboratory'] : []),
     'Enrolment',
-    'Items received',
-    'Results sent',
+    ...(showsNames ? ['Items received', 'Results sent'] : []),
   ];
   const lines = rows.map((row) => [
     row.participantCode,
     ...(showsNames ? [(row.laboratoryName ?? '').replace(/^(?=[=+\-@])/, "'")] : []),
     row.state,
-    row.itemsReceivedAt ?? '',
-    row.submittedAt ?? '',
+    ...(showsNames ? [row.itemsReceivedAt ?? '', row.submittedAt ?? ''] : []),
   ]);
   return [header, ...lines].map((cells) => cells.join('\t')).join('\n');
 }

@@ -11,7 +11,7 @@ import { getRound } from './round-plan';
 /** A page that refreshes itself would fill the log; one line an hour and person tells as much. */
 const LOOK_COUNTS_FOR_MS = 3_600_000;
 
-/** A participant as far as the reader may know it: without the key there is a code and no laboratory. */
+/** A participant as far as the reader may know it: without the key there is a code, its state, and nothing else. */
 export type ParticipantEntry = Omit<Participant, 'laboratoryName' | 'town'> & {
   laboratoryName: string | null;
   town: string | null;
@@ -22,6 +22,19 @@ async function noteLook(userId: number, roundId: number): Promise<void> {
   const since = new Date(Date.now() - LOOK_COUNTS_FOR_MS).toISOString();
   if (!(await hasRecentEntry(db(), { ...look, since }))) await addAuditEntry(db(), look);
 }
+
+/** Whatever the log of the installation or the outbox tells beside a laboratory's name would lead from there to its code. */
+const WITHOUT_KEY = {
+  enrolmentId: 0,
+  laboratoryId: 0,
+  laboratoryName: null,
+  town: null,
+  reason: '',
+  itemsReceivedAt: null,
+  submittedAt: null,
+  resultCount: null,
+  receiptCode: null,
+} as const satisfies Partial<ParticipantEntry>;
 
 /**
  * Everyone enrolled or invited. For those who may see the key the names stand behind the codes, and the look is in
@@ -35,7 +48,7 @@ export async function listParticipantsFor(actor: Actor, slug: string): Promise<P
     return participants;
   }
   return participants
-    .map((entry) => ({ ...entry, laboratoryId: 0, laboratoryName: null, town: null, reason: '' }))
+    .map(({ participantCode, state }) => ({ ...WITHOUT_KEY, participantCode, state }))
     .sort((a, b) => a.participantCode.localeCompare(b.participantCode));
 }
 

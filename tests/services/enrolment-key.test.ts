@@ -1,6 +1,7 @@
 import { expect, it } from 'vitest';
 import { listLaboratoriesToAdd, listParticipantsFor } from '@/lib/services/participant-key';
 import { confirmReceipt, enrolLaboratories, moveEnrolment } from '@/lib/services/enrolments';
+import { getRoundLog } from '@/lib/services/round-log';
 import { closeRound } from '@/lib/services/round-steps';
 import { testDatabase } from '../db/test-database';
 import { addLaboratory, newActor } from './people-fixture';
@@ -61,6 +62,21 @@ it('shows codes without names to those who may not see the key, in an order that
   const codes = seen.map(({ participantCode }) => participantCode);
   expect(codes).toEqual([...codes].sort());
   expect(await logOf(db)).not.toContain('key.viewed');
+});
+
+it('gives those without the key nothing that leads from a code to a line with a name', async () => {
+  const db = await testDatabase();
+  const planned = await openWithLaboratories(db, 3);
+  await loadResults(planned, [10, 11, 12]);
+  const administrator = await newActor(db, { name: 'Ada Birch', roles: ['administrator'] });
+  const [entry] = await listParticipantsFor(administrator, planned.round);
+  // Times, receipts and the order of the rows also stand in the log of the installation, beside the names.
+  expect(entry).toMatchObject({ enrolmentId: 0, submittedAt: null, receiptCode: null, resultCount: null });
+  const { lines } = await getRoundLog(administrator, planned.round);
+  expect(lines.filter(({ action }) => action === 'enrolment.enrolled')).toHaveLength(3);
+  expect(lines.every(({ participantCode }) => participantCode === null)).toBe(true);
+  const forCoordinator = await getRoundLog(planned.coordinator, planned.round);
+  expect(forCoordinator.lines.filter(({ participantCode }) => participantCode !== null)).toHaveLength(3);
 });
 
 it('withdraws with a reason, lets the laboratory in again, and refuses a move that makes no sense', async () => {

@@ -9,11 +9,11 @@ import { findOr404 } from '../../find-or-404';
 export const metadata = { title: 'Log' };
 
 export default async function LogPage({ params, searchParams }: PageProps<'/rounds/[round]/log'>) {
-  await requirePageActor('round:see-log');
+  const actor = await requirePageActor('round:see-log');
   const { round: slug } = await params;
   const { before } = await searchParams;
   const from = typeof before === 'string' && /^\d{1,12}$/.test(before) ? Number(before) : undefined;
-  const { lines, olderThan } = await findOr404(getRoundLog(slug, from));
+  const { lines, olderThan } = await findOr404(getRoundLog(actor, slug, from));
   return (
     <section className="flex flex-col gap-3" aria-labelledby="log">
       <h2 id="log">Log of the round</h2>
