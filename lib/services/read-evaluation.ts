@@ -8,8 +8,9 @@ import {
   type Evaluation,
   type SignOff,
 } from '@/db/evaluation-store';
-import { listRoundMeasurands, type RoundMeasurand } from '@/db/round-measurand-store';
+import type { RoundMeasurand } from '@/db/round-measurand-store';
 import { findRound, type Round } from '@/db/round-store';
+import { getSettingsText } from '@/db/views/evaluation-inputs-view';
 import { findUserName, listRoleHolders } from '@/db/views/round-people-view';
 import { notFound } from '@/lib/errors';
 import { can, laboratoriesOf } from '@/lib/rules/permissions';
@@ -28,11 +29,14 @@ export interface RoundEvaluation {
   measurands: EvaluatedPlan[];
 }
 
-/** The newest evaluation of a round with every measurand, or null before the first. */
+/**
+ * The newest evaluation of a round with every measurand, or null before the first. Names, decimals and limits are those
+ * it was made with: what the scheme says today must not change a report that was signed.
+ */
 export async function findRoundEvaluation(connection: Db, round: Round): Promise<RoundEvaluation | null> {
   const evaluation = await findLatestEvaluation(connection, round.id);
   if (!evaluation) return null;
-  const plans = await listRoundMeasurands(connection, round.id);
+  const plans = JSON.parse(await getSettingsText(connection, evaluation.id)) as RoundMeasurand[];
   const bodies = new Map(
     (await listEvaluatedMeasurands(connection, evaluation.id)).map((entry) => [
       entry.roundMeasurandId,

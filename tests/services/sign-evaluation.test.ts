@@ -5,10 +5,11 @@ import { getPreparedEvaluation, listSigners } from '@/lib/services/read-evaluati
 import { getRoundOverview, signatureOf } from '@/lib/services/round-overview';
 import { getRound } from '@/lib/services/round-plan';
 import { closeRound, publishRound } from '@/lib/services/round-steps';
+import { changeMeasurand, getSchemeWithMeasurands } from '@/lib/services/schemes';
 import { returnEvaluation, signEvaluation } from '@/lib/services/sign-evaluation';
 import { testDatabase } from '../db/test-database';
 import { newActor } from './people-fixture';
-import { loadResults, logOf, openWithLaboratories } from './round-fixture';
+import { loadResults, logOf, MEASURAND, openWithLaboratories } from './round-fixture';
 
 async function evaluatedRound(db: Awaited<ReturnType<typeof testDatabase>>) {
   const planned = await openWithLaboratories(db, 2);
@@ -76,4 +77,19 @@ it('does not count the signature of a version that was followed by another', asy
   await returnEvaluation(reviewer, round, 1, 'On second thoughts, no.');
   await evaluateRound(both, round);
   await expect(publishRound(coordinator, round)).rejects.toMatchObject({ code: 'blocked' });
+});
+
+it('shows what was signed even when the scheme has changed since', async () => {
+  const db = await testDatabase();
+  const { coordinator, scheme, round } = await evaluatedRound(db);
+  const { measurands } = await getSchemeWithMeasurands(scheme);
+  const change = { ...MEASURAND, name: 'Something else', decimals: 4, decisionLimit: 5 };
+  await changeMeasurand(coordinator, scheme, measurands[0]?.id ?? 0, change);
+  const plan = (await getPreparedEvaluation(round))?.measurands[0]?.plan;
+  expect(plan).toMatchObject({
+    name: MEASURAND.name,
+    decimals: 1,
+    decisionLimit: null,
+    zPrimeWhenNeeded: true,
+  });
 });
