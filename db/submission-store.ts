@@ -71,6 +71,20 @@ export async function findCurrentSubmission(
   return row ? fromRow<Submission & { sha256: string }>(row) : null;
 }
 
+/** The laboratories whose results that count came from themselves, not with a whole round. */
+export async function listOwnSenders(
+  connection: Db,
+  roundId: number,
+): Promise<{ laboratoryId: number; name: string }[]> {
+  return connection('submissions')
+    .join('enrolments', 'enrolments.id', 'submissions.enrolment_id')
+    .join('laboratories', 'laboratories.id', 'enrolments.laboratory_id')
+    .where({ 'submissions.round_id': roundId, 'submissions.state': 'submitted' })
+    .whereNot('submissions.channel', 'whole-round')
+    .orderBy('laboratories.name')
+    .select('laboratories.id as laboratoryId', 'laboratories.name as name');
+}
+
 export async function markSuperseded(connection: Db, id: number): Promise<void> {
   await connection('submissions').where({ id }).update({ state: 'superseded' });
 }

@@ -33,5 +33,5 @@ function whyNoResults(round: LaboratoryRound, now: string): string | null {
   if (round.enrolmentState !== 'enrolled') return `Your laboratory is ${round.enrolmentState} in this round.`;
   if (round.state === 'draft') return 'The round is not open for results yet.';
   if (round.state !== 'open') return 'The round no longer takes results.';
-  return !round.isPast && round.closesAt <= now ? 'The time for results has passed.' : null;
+  return round.closesAt <= now ? 'The time for results has passed.' : null;
 }

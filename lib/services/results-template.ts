@@ -1,10 +1,8 @@
 import 'server-only';
 import { db } from '@/db/connection';
-import { findEnrolment } from '@/db/enrolment-store';
-import { findRound } from '@/db/round-store';
-import { notFound } from '@/lib/errors';
 import { resultsTemplate, wholeRoundTemplate } from '@/lib/results-file';
 import { listParticipants } from '@/db/views/participants-view';
+import { findOwnEnrolment } from './open-enrolment';
 import { getRound } from './round-plan';
 import { getResultsPlan } from './results-plan';
 
@@ -16,9 +14,7 @@ export async function laboratoryTemplate(
   laboratoryId: number,
   separator: Separator,
 ): Promise<string> {
-  const round = await findRound(db(), slug);
-  const enrolment = round ? await findEnrolment(db(), round.id, laboratoryId) : null;
-  if (!round || !enrolment || round.state === 'draft') throw notFound('The round');
+  const { round } = await findOwnEnrolment(db(), slug, laboratoryId);
   return resultsTemplate(await getResultsPlan(db(), round), { separator });
 }
 

@@ -1,8 +1,10 @@
 import { createHash } from 'node:crypto';
 import { describe, expect, it } from 'vitest';
-import { moveEnrolment } from '@/lib/services/enrolments';
+import { confirmReceipt, moveEnrolment } from '@/lib/services/enrolments';
+import { laboratoryTemplate } from '@/lib/services/results-template';
 import { closeRound } from '@/lib/services/round-steps';
 import { checkResultsFile, submitResultsFile } from '@/lib/services/submit-results';
+import { todayAnywhere } from '@/lib/services/today-anywhere';
 import { testDatabase } from '../db/test-database';
 import { at, csvOf, fileOf, openWithManagers, send, submitAs } from './laboratory-fixture';
 import { addLaboratory, logOf as fullLogOf } from './people-fixture';
@@ -130,6 +132,11 @@ describe('who may send, and when', () => {
       userMessage: 'Maize 1 takes no results: it is closed and under review.',
     });
     expect(await counts(db)).toEqual({ uploads: 1, submissions: 1, results: 1 });
+    expect((await fullLogOf(db)).at(-1)).toMatchObject({
+      action: 'results.refused',
+      outcome: 'refused',
+      detail: expect.stringMatching(/takes no results.*SHA-256/),
+    });
   });
 
   it('refuses after the closing time, even before the coordinator closes', async () => {
@@ -154,6 +161,22 @@ describe('who may send, and when', () => {
       });
     }
     expect(await counts(db)).toEqual({ uploads: 0, submissions: 0, results: 0 });
+  });
+
+  it('does not know a round that the provider loads after the event', async () => {
+    const db = await testDatabase();
+    const open = await openWithManagers(db, 1, { isPast: true });
+    const { actor, laboratoryId } = at(open, 0);
+    const missing = { code: 'not-found' };
+    await expect(submitAs(open, 0, csvOf('8.4'))).rejects.toMatchObject(missing);
+    await expect(laboratoryTemplate(open.round, laboratoryId, ',')).rejects.toMatchObject(missing);
+    await expect(confirmReceipt(actor, open.round, laboratoryId)).rejects.toMatchObject(missing);
+    expect(await counts(db)).toEqual({ uploads: 0, submissions: 0, results: 0 });
+  });
+
+  it('takes a date that is today where the day begins first, and none after it', () => {
+    expect(todayAnywhere(new Date('2026-12-01T09:59:59Z'))).toBe('2026-12-01');
+    expect(todayAnywhere(new Date('2026-12-01T10:00:00Z'))).toBe('2026-12-02');
   });
 
   it('refuses a laboratory that was withdrawn', async () => {

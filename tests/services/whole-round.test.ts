@@ -1,7 +1,10 @@
 import { expect, it } from 'vitest';
+import { moveEnrolment } from '@/lib/services/enrolments';
+import { listParticipantsFor } from '@/lib/services/participant-key';
 import { getResultsByCode } from '@/lib/services/round-results';
 import { checkWholeRoundFile, loadWholeRound } from '@/lib/services/whole-round';
 import { testDatabase } from '../db/test-database';
+import { csvOf, openWithManagers, send } from './laboratory-fixture';
 import { logOf, loadResults, openWithLaboratories, planRound, wholeRoundFile } from './round-fixture';
 
 const fileOf = (text: string) => ({ name: 'round.csv', bytes: Buffer.from(text) });
@@ -64,4 +67,52 @@ it('takes results only while the round is open', async () => {
     code: 'conflict',
     userMessage: expect.stringContaining('being planned'),
   });
+});
+
+it('leaves alone what a laboratory sent itself', async () => {
+  const db = await testDatabase();
+  const open = await openWithManagers(db, 2);
+  await send(open, 0, csvOf('8.4'));
+  const file = fileOf(wholeRoundFile([10, 11]));
+  const refusal = { code: 'conflict', userMessage: expect.stringContaining('have sent their own: Mill 1.') };
+  await expect(checkWholeRoundFile(open.round, file)).rejects.toMatchObject(refusal);
+  await expect(loadWholeRound(open.coordinator, open.round, file)).rejects.toMatchObject(refusal);
+  const [result] = (await getResultsByCode(open.round)).results;
+  expect(result?.resultText).toBe('8.4');
+  const others = fileOf('laboratory,item,measurand,result\nMill 2,M1,AFT,11\n');
+  expect(await loadWholeRound(open.coordinator, open.round, others)).toMatchObject({ laboratoryCount: 1 });
+});
+
+it('writes down whom a file brings in and whom it brings back', async () => {
+  const db = await testDatabase();
+  const planned = await openWithLaboratories(db, 1);
+  await moveEnrolment(planned.coordinator, planned.round, planned.laboratoryIds[0] ?? 0, 'withdrawn', 'Lost');
+  await loadResults(planned, [10, 11]);
+  expect((await logOf(db)).slice(-4)).toEqual([
+    'enrolment.enrolled',
+    'laboratory.created',
+    'enrolment.enrolled',
+    'results.loaded',
+  ]);
+  const [back] = await listParticipantsFor(planned.coordinator, planned.round);
+  expect(back).toMatchObject({ laboratoryName: 'Mill 1', state: 'enrolled', reason: '' });
+});
+
+it('says how many laboratories a round can have', async () => {
+  const db = await testDatabase();
+  const planned = await openWithLaboratories(db, 0);
+  const many = Array.from({ length: 4_501 }, () => 10);
+  await expect(loadResults(planned, many)).rejects.toMatchObject({
+    code: 'conflict',
+    userMessage: expect.stringContaining('at most 4499 laboratories'),
+  });
+  expect(await countRows(db, 'laboratories')).toBe(0);
+});
+
+it('refuses a name that no laboratory can have', async () => {
+  const db = await testDatabase();
+  const { coordinator, round } = await openWithLaboratories(db, 0);
+  const text = `laboratory,item,measurand,result\n${'x'.repeat(121)},M1,AFT,11\n`;
+  const { report } = await loadWholeRound(coordinator, round, fileOf(text));
+  expect(report.problems).toMatchObject([{ line: 2, column: 'laboratory', code: 'cell-too-long' }]);
 });
