@@ -13,7 +13,7 @@ export default async function FrontPage() {
   return (
     <>
       <div className="flex flex-wrap items-center justify-between gap-x-16 gap-y-8 pt-4">
-        <header className="flex max-w-prose flex-1 basis-96 flex-col gap-4">
+        <header className="flex max-w-measure flex-1 basis-96 flex-col gap-4">
           <h1>The same grain, measured blind in many laboratories</h1>
           <p className="report-text text-lg">
             A truck of maize is accepted or turned away on one figure. Assize is where laboratories learn how

@@ -23,12 +23,9 @@ export function SearchForm({ path, text, label }: { path: string; text: string; 
         defaultValue={text}
         className="w-full max-w-sm"
       />
-      {/* The field above ends with the room for its error. */}
-      <Button type="submit" className="mb-1">
-        Search
-      </Button>
+      <Button type="submit">Search</Button>
       {text && (
-        <Link href={path} className="text-link mb-1 inline-flex min-h-9 items-center">
+        <Link href={path} className="text-link inline-flex min-h-11 md:min-h-9 items-center">
           Show all
         </Link>
       )}

@@ -10,7 +10,7 @@ export type SignFormProps = { action: FormAction; round: string; version: number
 export function SignForm({ action, round, version }: SignFormProps) {
   const form = useServerForm(action);
   return (
-    <form {...form.formProps} className="flex max-w-prose flex-col gap-3">
+    <form {...form.formProps} className="flex max-w-measure flex-col gap-3">
       <input type="hidden" name="round" value={round} />
       <input type="hidden" name="version" value={version} />
       <TextArea

@@ -57,7 +57,11 @@ function rowsOf({ algorithmA, median, madE, nIqr, mean, sd, reasons }: RobustSum
 export function EstimatesTable({ robust, unit, decimals, working }: EstimatesTableProps) {
   const digits = statisticDecimals(decimals);
   return (
-    <Table caption={`Estimates from ${robust.count} results, in ${unit}`} fullHeight className="max-w-prose">
+    <Table
+      caption={`Estimates from ${robust.count} results, in ${unit}`}
+      fullHeight
+      className="max-w-measure"
+    >
       <thead>
         <tr>
           <Th>Estimator</Th>

@@ -2,7 +2,7 @@
 export function NotesList({ notes }: { notes: readonly string[] }) {
   if (notes.length === 0) return null;
   return (
-    <ul aria-label="Notes" className="max-w-prose list-disc pl-5">
+    <ul aria-label="Notes" className="max-w-measure list-disc pl-5">
       {notes.map((note) => (
         <li key={note}>{note}</li>
       ))}

@@ -60,7 +60,7 @@ export function ParticipantsTable({ round, rows, withdraw, enrol }: Participants
           <CopyButton text={() => asText(shown, showsNames)} label="Copy as text" />
         </span>
       </div>
-      <Table caption="Participants" hideCaption>
+      <Table caption="Participants" hideCaption stacked>
         <thead>
           <tr>
             <Th>Code</Th>
@@ -82,12 +82,12 @@ export function ParticipantsTable({ round, rows, withdraw, enrol }: Participants
                 {row.participantCode}
               </Th>
               {showsNames && (
-                <Td>
+                <Td label="Laboratory">
                   {row.laboratoryName}
                   {row.town && <span className="text-ink-soft">, {row.town}</span>}
                 </Td>
               )}
-              <Td>
+              <Td label="Enrolment">
                 <StateTag of="enrolment" state={row.state} />
                 {row.reason && <span className="block max-w-64 text-sm text-ink-soft">{row.reason}</span>}
               </Td>
@@ -108,8 +108,10 @@ export function ParticipantsTable({ round, rows, withdraw, enrol }: Participants
 function Progress({ row }: { row: ParticipantRow }) {
   return (
     <>
-      <Td className="figures">{row.itemsReceivedAt ? formatDateTime(row.itemsReceivedAt) : <Nothing />}</Td>
-      <Td className="figures">
+      <Td label="Items received" className="figures">
+        {row.itemsReceivedAt ? formatDateTime(row.itemsReceivedAt) : <Nothing />}
+      </Td>
+      <Td label="Results sent" className="figures">
         {row.submittedAt ? (
           <>
             {formatDateTime(row.submittedAt)}

@@ -27,11 +27,11 @@ export type RoundTableProps = {
 
 export function RoundTable({ caption, hideCaption = true, rounds, hideScheme }: RoundTableProps) {
   return (
-    <Table caption={caption} hideCaption={hideCaption} fullHeight className="md:table-fixed">
+    <Table caption={caption} hideCaption={hideCaption} fullHeight stacked className="md:table-fixed">
       <thead>
         <tr>
-          <Th className="md:w-1/4">Round</Th>
-          {!hideScheme && <Th className="hidden md:table-cell md:w-1/5">Scheme</Th>}
+          <Th className="md:w-1/5">Round</Th>
+          {!hideScheme && <Th className="max-md:hidden! md:w-1/4">Scheme</Th>}
           <Th className="md:w-1/5">State</Th>
           <Th>Results due</Th>
           <Th>Publication</Th>
@@ -50,18 +50,22 @@ export function RoundTable({ caption, hideCaption = true, rounds, hideScheme }: 
               )}
             </Th>
             {!hideScheme && (
-              <Td className="hidden md:table-cell">
+              <Td className="max-md:hidden!">
                 <Link href={`/schemes/${round.schemeSlug}`} className="text-link">
                   {round.schemeName}
                 </Link>
               </Td>
             )}
-            <Td>
+            <Td label="State">
               <StateTag of="round" state={round.state} />
             </Td>
-            <Td className="figures">{formatDate(round.closesAt)}</Td>
-            <Td className="figures">{formatDate(round.publishedAt ?? round.publishAt)}</Td>
-            <Td numeric className="figures">
+            <Td label="Results due" className="figures">
+              {formatDate(round.closesAt)}
+            </Td>
+            <Td label="Publication" className="figures">
+              {formatDate(round.publishedAt ?? round.publishAt)}
+            </Td>
+            <Td label="Results sent" numeric className="figures">
               {round.submittedCount} of {round.participantCount}
             </Td>
           </tr>

@@ -55,7 +55,7 @@ export function DropZone({ label, hint, choose, complaint, onFiles }: DropZonePr
       )}
     >
       <p className="font-serif text-lg font-semibold">{label}</p>
-      <p id={`${id}-hint`} className="max-w-prose text-ink-soft">
+      <p id={`${id}-hint`} className="max-w-measure text-ink-soft">
         {hint}
       </p>
       <label

@@ -38,7 +38,7 @@ function Genuine({ receipt }: { receipt: PublicReceipt }) {
           { label: 'SHA-256 of the file', value: <code className="text-sm">{receipt.sha256}</code> },
         ]}
       />
-      <p className="max-w-prose text-ink-soft">
+      <p className="max-w-measure text-ink-soft">
         The SHA-256 is a fingerprint of the file. If the file you hold has the same, it is the one that was
         received, byte for byte; <code className="text-sm">sha256sum</code> on a command line computes it.
       </p>

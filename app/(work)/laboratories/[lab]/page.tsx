@@ -80,11 +80,11 @@ function Enrolments({ enrolments }: { enrolments: EnrolmentLine[] }) {
     );
   }
   return (
-    <Table caption="Rounds of the laboratory" hideCaption>
+    <Table caption="Rounds of the laboratory" hideCaption stacked>
       <thead>
         <tr>
           <Th>Round</Th>
-          <Th>Closes</Th>
+          <Th>Results due</Th>
           <Th>Enrolment</Th>
           <Th>Results</Th>
         </tr>
@@ -97,11 +97,13 @@ function Enrolments({ enrolments }: { enrolments: EnrolmentLine[] }) {
                 {enrolment.roundName}
               </Link>
             </Th>
-            <Td className="figures">{formatDate(enrolment.closesAt)}</Td>
-            <Td>
+            <Td label="Results due" className="figures">
+              {formatDate(enrolment.closesAt)}
+            </Td>
+            <Td label="Enrolment">
               <StateTag of="enrolment" state={enrolment.state} />
             </Td>
-            <Td>
+            <Td label="Results">
               <StateTag of="submission" state={enrolment.hasSubmitted ? 'submitted' : 'none'} />
             </Td>
           </tr>

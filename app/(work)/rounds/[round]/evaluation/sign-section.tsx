@@ -49,7 +49,7 @@ function Decide({ slug, version }: { slug: string; version: number }) {
   return (
     <section className="flex flex-col gap-3 border-y border-rule-strong py-4" aria-labelledby="decide">
       <h2 id="decide">Sign or return version {version}</h2>
-      <p className="max-w-prose">
+      <p className="max-w-measure">
         You did not prepare this evaluation. Your signature says that you have read it and release it for
         publication.
       </p>

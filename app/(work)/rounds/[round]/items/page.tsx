@@ -15,6 +15,7 @@ export default async function ItemsPage({ params }: PageProps<'/rounds/[round]/i
   const { round: slug } = await params;
   const { round } = await loadRound(slug);
   const { items, measurands } = await getRoundPlan(slug);
+  const common = commonHandling(items);
   const enrolled = (await listParticipantsFor(actor, slug)).filter((entry) => entry.state === 'enrolled');
   return (
     <>
@@ -34,8 +35,14 @@ export default async function ItemsPage({ params }: PageProps<'/rounds/[round]/i
             key={item.id}
             item={item}
             measurands={measurands.filter((entry) => entry.testItemId === item.id)}
+            showHandling={common === null}
           />
         ))}
+        {common !== null && (
+          <p className="max-w-measure whitespace-pre-wrap">
+            <strong>Handling of every item.</strong> {common}
+          </p>
+        )}
       </section>
       {enrolled.length > 0 && (
         <section className="flex flex-col gap-3" aria-labelledby="receipt">
@@ -51,7 +58,20 @@ export default async function ItemsPage({ params }: PageProps<'/rounds/[round]/i
   );
 }
 
-function Item({ item, measurands }: { item: PlannedItem; measurands: PlannedMeasurand[] }) {
+/** What is the same for several items is said once; null when they differ. */
+function commonHandling(items: readonly PlannedItem[]): string | null {
+  const texts = new Set(items.map((item) => item.handling.trim()));
+  const [text] = texts;
+  return items.length > 1 && texts.size === 1 && text ? text : null;
+}
+
+interface ItemProps {
+  item: PlannedItem;
+  measurands: PlannedMeasurand[];
+  showHandling: boolean;
+}
+
+function Item({ item, measurands, showHandling }: ItemProps) {
   return (
     <article className="flex flex-col gap-2" aria-label={`Item ${item.code}`}>
       <h3>
@@ -66,9 +86,11 @@ function Item({ item, measurands }: { item: PlannedItem; measurands: PlannedMeas
           },
         ]}
       />
-      <p className="max-w-prose whitespace-pre-wrap">
-        {item.handling || <span className="text-ink-soft">No handling instructions of its own.</span>}
-      </p>
+      {showHandling && (
+        <p className="max-w-measure whitespace-pre-wrap">
+          {item.handling || <span className="text-ink-soft">No handling instructions of its own.</span>}
+        </p>
+      )}
     </article>
   );
 }
@@ -100,8 +122,11 @@ function Receipt({
       {received.length > 0 && (
         <ul className="columns-1 gap-x-10 sm:columns-2">
           {received.map((entry) => (
-            <li key={entry.participantCode} className="border-b py-1">
-              {nameOf(entry)}{' '}
+            <li
+              key={entry.participantCode}
+              className="flex flex-wrap justify-between gap-x-4 break-inside-avoid border-b py-1"
+            >
+              {nameOf(entry)}
               <span className="figures text-ink-soft">{formatDateTime(entry.itemsReceivedAt)}</span>
             </li>
           ))}

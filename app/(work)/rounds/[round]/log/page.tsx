@@ -21,7 +21,7 @@ export default async function LogPage({ params, searchParams }: PageProps<'/roun
         What was done in this round and by whom, the newest first. People of laboratories appear as
         participant codes.
       </p>
-      <Table caption="Log of the round" hideCaption fullHeight>
+      <Table caption="Log of the round" hideCaption fullHeight stacked>
         <thead>
           <tr>
             <Th>When</Th>
@@ -33,13 +33,19 @@ export default async function LogPage({ params, searchParams }: PageProps<'/roun
         <tbody>
           {lines.map((line) => (
             <tr key={line.id}>
-              <Td className="figures">{formatDateTime(line.at)}</Td>
-              <Td>{whoWords(line)}</Td>
-              <Td>
+              <Td label="When" className="figures">
+                {formatDateTime(line.at)}
+              </Td>
+              <Td label="Who" className="min-w-40">
+                {whoWords(line)}
+              </Td>
+              <Td label="What" className="min-w-64">
                 {actionWords(line)}
                 {line.outcome === 'refused' && <span className="text-warning"> (refused)</span>}
               </Td>
-              <Td className="wrap-anywhere text-sm text-ink-soft">{line.detail}</Td>
+              <Td label={line.detail ? 'Details' : undefined} className="wrap-anywhere text-sm text-ink-soft">
+                {line.detail}
+              </Td>
             </tr>
           ))}
         </tbody>

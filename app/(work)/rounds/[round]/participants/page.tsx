@@ -79,7 +79,7 @@ function WholeRound({ slug }: { slug: string }) {
   return (
     <section className="flex flex-col gap-3" aria-labelledby="whole-round">
       <h2 id="whole-round">Load a whole round</h2>
-      <p className="max-w-prose text-ink-soft">
+      <p className="max-w-measure text-ink-soft">
         For a past round, or when all results come in one file. Laboratories named in it are enrolled, and new
         ones are made. All of the file is taken or nothing.{' '}
         <a href={`/api/rounds/${slug}/template?whole=1`} className="text-link">

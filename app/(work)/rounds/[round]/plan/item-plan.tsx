@@ -44,7 +44,7 @@ export function ItemPlan({ round, item, measurands, isDraft, children }: ItemPla
       {measurands.length === 0 ? (
         <p className="text-ink-soft">No measurand yet.</p>
       ) : (
-        <Table caption={`Measurands of item ${item.code}`} hideCaption fullHeight>
+        <Table caption={`Measurands of item ${item.code}`} hideCaption fullHeight stacked>
           <thead>
             <tr>
               <Th>Measurand</Th>
@@ -87,14 +87,20 @@ function MeasurandRow({
       <Th scope="row">
         <span className="font-semibold">{entry.code}</span> {entry.name}
       </Th>
-      <Td>{entry.unit}</Td>
-      <Td numeric>{entry.replicates}</Td>
-      <Td className="min-w-40">
+      <Td label="Unit">{entry.unit}</Td>
+      <Td label="Replicates" numeric>
+        {entry.replicates}
+      </Td>
+      <Td label="Assigned value" className="min-w-40">
         {assignedWords(entry, entry.unit)}
         {entry.statedSource && <span className="block text-sm text-ink-soft">{entry.statedSource}</span>}
       </Td>
-      <Td className="min-w-40">{sigmaWords(entry, entry.unit)}</Td>
-      <Td className="min-w-40">{scoreWords(entry)}</Td>
+      <Td label="sigma_pt" className="min-w-40">
+        {sigmaWords(entry, entry.unit)}
+      </Td>
+      <Td label="Score" className="min-w-40">
+        {scoreWords(entry)}
+      </Td>
       {isDraft && (
         <Td className="text-right whitespace-nowrap">
           <MeasurandPlanDialog

@@ -10,15 +10,15 @@ export function MeasurandReport({ plan, evaluation }: EvaluatedPlan) {
     <section className="flex flex-col gap-4 print:break-before-page" aria-label={title}>
       <h3 className="text-xl">{title}</h3>
       {plan.decisionLimit !== null && (
-        <p>
-          Decision limit, as an example: {plan.decisionLimit} {plan.unit}
-          {plan.decisionLimitSource && ` (${plan.decisionLimitSource})`}.
+        <p className="max-w-measure">
+          Decision limit, as an example: {plan.decisionLimit} {plan.unit}.{' '}
+          <span className="text-ink-soft">{plan.decisionLimitSource ?? 'No source is given.'}</span>
         </p>
       )}
       <EvaluationFacts evaluation={evaluation} plan={plan} />
       <NotesList notes={evaluation.notes} />
       <ScoresChart plan={plan} evaluation={evaluation} />
-      <ReportTable caption={`Scores by participant code`} evaluation={evaluation} plan={plan} />
+      <ReportTable caption="Scores by participant code" evaluation={evaluation} plan={plan} />
     </section>
   );
 }

@@ -63,7 +63,7 @@ export default async function ResultsPage({ params, searchParams }: PageProps<'/
 function Missing({ codes, isOpen }: { codes: string[]; isOpen: boolean }) {
   if (codes.length === 0) return null;
   return (
-    <details className="max-w-prose border-y py-1" open={codes.length <= 20}>
+    <details className="max-w-measure border-y py-1" open={codes.length <= 20}>
       <summary className="flex min-h-9 items-center font-semibold text-press">
         {formatCount(codes.length, 'participant has', 'participants have')} sent nothing{isOpen && ' yet'}
       </summary>
