@@ -20,7 +20,7 @@ export function OpenRounds({ rounds, now }: OpenRoundsProps) {
       {rounds.length === 0 ? (
         <p className="text-ink-soft">No round is open at the moment. The next dates will stand here.</p>
       ) : (
-        <Table caption="Dates of the open rounds" hideCaption fullHeight>
+        <Table caption="Dates of the open rounds" hideCaption fullHeight stacked>
           <thead>
             <tr>
               <Th>Round</Th>
@@ -36,14 +36,18 @@ export function OpenRounds({ rounds, now }: OpenRoundsProps) {
                   <span className="font-semibold">{round.name}</span>
                   <span className="block text-sm font-normal text-ink-soft">{round.schemeName}</span>
                 </Th>
-                <Td className="figures">{formatDate(round.dispatchAt)}</Td>
-                <Td className="figures">
+                <Td label="Items leave" className="figures">
+                  {formatDate(round.dispatchAt)}
+                </Td>
+                <Td label="Results due" className="figures">
                   {formatDate(round.closesAt)}
                   <span className="block text-sm text-ink-soft">
                     {formatRelativeDays(round.closesAt, now)}
                   </span>
                 </Td>
-                <Td className="figures">{formatDate(round.publishAt)}</Td>
+                <Td label="Scores planned" className="figures">
+                  {formatDate(round.publishAt)}
+                </Td>
               </tr>
             ))}
           </tbody>

@@ -26,7 +26,7 @@ export function PastRounds({ rounds }: { rounds: readonly PastRound[] }) {
           Results over time
         </Link>
       </div>
-      <Table caption="Past rounds and your scores" hideCaption>
+      <Table caption="Past rounds and your scores" hideCaption stacked fullHeight>
         <thead>
           <tr>
             <Th>Round</Th>
@@ -47,15 +47,19 @@ export function PastRounds({ rounds }: { rounds: readonly PastRound[] }) {
                 </Link>
                 <span className="block text-sm font-normal text-ink-soft">{round.schemeName}</span>
               </Th>
-              <Td className="figures">{formatDate(round.closesAt)}</Td>
-              <Td>
+              <Td label="Results due" className="figures">
+                {formatDate(round.closesAt)}
+              </Td>
+              <Td label="State" className={round.state === 'published' ? 'max-sm:hidden!' : undefined}>
                 {round.enrolmentState === 'enrolled' ? (
                   <StateTag of="round" state={round.state} />
                 ) : (
                   <StateTag of="enrolment" state={round.enrolmentState} />
                 )}
               </Td>
-              <Td>{round.state === 'published' ? <SignalTally signals={round.signals} /> : '\u2013'}</Td>
+              <Td label="Your scores">
+                {round.state === 'published' ? <SignalTally signals={round.signals} /> : '\u2013'}
+              </Td>
             </tr>
           ))}
         </tbody>

@@ -16,7 +16,7 @@ export type ReceiptListProps = { round: string; receipts: readonly ReceiptListEn
 /** Every submission of the laboratory in a round; replaced ones stay in the record. */
 export function ReceiptList({ round, receipts }: ReceiptListProps) {
   return (
-    <Table caption="Your submissions" fullHeight>
+    <Table caption="Your submissions" fullHeight stacked>
       <thead>
         <tr>
           <Th>Receipt</Th>
@@ -37,12 +37,14 @@ export function ReceiptList({ round, receipts }: ReceiptListProps) {
                 {receipt.receiptCode}
               </Link>
             </Th>
-            <Td>
+            <Td label="State">
               <StateTag of="submission" state={receipt.state} />
             </Td>
-            <Td className="figures">{formatDateTime(receipt.submittedAt)}</Td>
-            <Td>{senderWords(receipt)}</Td>
-            <Td numeric className="figures">
+            <Td label="Received" className="figures">
+              {formatDateTime(receipt.submittedAt)}
+            </Td>
+            <Td label="Sent by">{senderWords(receipt)}</Td>
+            <Td label="Results" numeric className="figures">
               {receipt.resultCount}
             </Td>
           </tr>

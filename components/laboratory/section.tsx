@@ -8,7 +8,7 @@ export function Section({ id, title, lead, children }: SectionProps) {
     <section id={id} aria-labelledby={`${id}-title`} className="flex scroll-mt-6 flex-col gap-4">
       <div>
         <h2 id={`${id}-title`}>{title}</h2>
-        {lead && <div className="mt-1 max-w-prose text-ink-soft">{lead}</div>}
+        {lead && <div className="mt-1 max-w-measure text-ink-soft">{lead}</div>}
       </div>
       {children}
     </section>

@@ -62,7 +62,7 @@ function ChosenTrend({ trend, chosen }: { trend: Trend; chosen: NonNullable<Tren
         fileName={`${chosen.code}-over-time`}
       />
       {apart > 0 && (
-        <p className="max-w-prose text-sm text-ink-soft">
+        <p className="max-w-measure text-sm text-ink-soft">
           {formatCount(apart, 'score')} E_n, judged at 1 instead of 2 and 3, left out of the chart and listed
           below.
         </p>

@@ -29,7 +29,7 @@ function Receiving({ own: { round }, laboratoryId, now }: ItemsPartProps) {
   if (round.state !== 'open') return null;
   const verb = round.dispatchAt <= now ? 'left' : 'leave';
   return (
-    <div className="flex max-w-prose flex-col gap-3">
+    <div className="flex max-w-measure flex-col gap-3">
       <p>
         The items {verb} the provider on {formatDate(round.dispatchAt)}. When they are here, check that the
         parcel is whole and that each label is there, store them as their handling says, and confirm.

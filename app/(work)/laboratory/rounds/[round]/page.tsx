@@ -34,7 +34,7 @@ export default async function OwnRoundPage({ params }: PageProps<'/laboratory/ro
       )}
       {round.instructions && (
         <Section id="instructions" title="Instructions from the provider">
-          <p className="max-w-prose whitespace-pre-line">{round.instructions}</p>
+          <p className="max-w-measure whitespace-pre-line">{round.instructions}</p>
         </Section>
       )}
     </>
@@ -80,11 +80,20 @@ interface PartsProps {
   now: string;
 }
 
+/** Items that have not arrived come first; else the results, which are what there is to do. */
 function Before({ own, place, now }: PartsProps) {
-  return (
+  const items = <ItemsPart own={own} laboratoryId={place.laboratoryId} now={now} />;
+  const results = <ResultsPart own={own} place={place} now={now} />;
+  const isWaitingForItems = own.round.itemsReceivedAt === null && own.receipts.length === 0;
+  return isWaitingForItems ? (
     <>
-      <ItemsPart own={own} laboratoryId={place.laboratoryId} now={now} />
-      <ResultsPart own={own} place={place} now={now} />
+      {items}
+      {results}
+    </>
+  ) : (
+    <>
+      {results}
+      {items}
     </>
   );
 }

@@ -116,7 +116,7 @@ function OwnWorking({ entry: { evaluation, scored, censored }, ownCode }: PartPr
 function Notes({ entry: { evaluation } }: { entry: OwnEntry }) {
   if (evaluation.notes.length === 0) return null;
   return (
-    <section aria-label="Notes on this evaluation" className="max-w-prose">
+    <section aria-label="Notes on this evaluation" className="max-w-measure">
       <h2 className="text-lg">Notes on this evaluation</h2>
       <ul className="mt-1 list-disc pl-5">
         {evaluation.notes.map((note) => (
