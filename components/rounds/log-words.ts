@@ -36,6 +36,43 @@ const WORDS: Record<string, string> = {
   'evaluation.returned': 'returned the evaluation',
 };
 
+/** What else happens in an installation, for the log of all of it. */
+const INSTALLATION_WORDS: Record<string, string> = {
+  ...WORDS,
+  'enrolment.invited': 'invited a laboratory to a round',
+  'enrolment.enrolled': 'enrolled a laboratory in a round',
+  'enrolment.declined': 'declined an invitation to a round',
+  'enrolment.withdrawn': 'withdrew a laboratory from a round',
+  'scheme.created': 'planned a scheme',
+  'scheme.changed': 'changed a scheme',
+  'measurand.created': 'added a measurand to a scheme',
+  'measurand.changed': 'changed a measurand of a scheme',
+  'laboratory.created': 'added a laboratory',
+  'laboratory.changed': 'changed the details of a laboratory',
+  'laboratory.chosen': 'changed to another laboratory',
+  'person.changed': 'changed the details of a person',
+  'person.disabled': 'closed an account',
+  'person.enabled': 'opened an account again',
+  'person.link-sent': 'sent a link to choose a password',
+  'person.role-given': 'gave a role',
+  'person.role-taken': 'took a role away',
+  'password.changed': 'changed a password',
+  'password.reset-asked': 'asked for a link to choose a new password',
+  'mail.sent-again': 'sent a message again',
+  'token.created': 'made a token',
+  'token.revoked': 'revoked a token',
+  'request.refused': 'asked for what the role does not allow',
+  'set-up': 'set up the installation',
+  'sign-in': 'signed in',
+  'sign-out': 'signed out',
+  'sign-out.everywhere': 'signed out everywhere',
+};
+
+/** A line of the installation's log in words; an action that has none is named by its code. */
+export function installationWords(action: string): string {
+  return INSTALLATION_WORDS[action] ?? `did ${action}`;
+}
+
 /** Who it was: people of the provider by name, people of a laboratory only by its code, or not even that. */
 export function whoWords(entry: LogEntry): string {
   if (entry.isStaff && entry.userName) return entry.userName;
