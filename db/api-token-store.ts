@@ -81,6 +81,16 @@ export async function listApiTokens(connection: Db, laboratoryId: number): Promi
   }));
 }
 
+export async function countTokensInForce(connection: Db, laboratoryId: number): Promise<number> {
+  const row = await connection('api_tokens')
+    .where({ laboratory_id: laboratoryId })
+    .whereNull('revoked_at')
+    .where('expires_at', '>', timestamp())
+    .count({ count: '*' })
+    .first();
+  return Number(row?.count ?? 0);
+}
+
 /** Returns the token's name, or null when the laboratory has no such token in force. */
 export async function revokeApiToken(
   connection: Db,

@@ -12,6 +12,7 @@ import type { Actor } from '@/lib/rules/roles';
 import type { ColleagueRoleInput, InviteColleagueInput } from '@/lib/schemas/people';
 import { giveRoles, takeRole } from './give-roles';
 import { mailLink } from './link-mail';
+import { requireLaboratory } from './own-laboratory';
 
 const LINKS_AN_HOUR = 3;
 const HOUR_MS = 3_600_000;
@@ -86,9 +87,4 @@ async function getColleague(trx: Db, laboratoryId: number, userId: number): Prom
     : null;
   if (!person) throw notFound('The person');
   return person;
-}
-
-function requireLaboratory(actor: Actor): number {
-  if (actor.laboratoryId === null) throw new AppError('forbidden', 'You belong to no laboratory.');
-  return actor.laboratoryId;
 }

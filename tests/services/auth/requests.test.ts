@@ -3,7 +3,7 @@ import { beforeEach, describe, expect, it } from 'vitest';
 import { authorise } from '@/lib/auth/authorise';
 import { sealSessionId } from '@/lib/auth/cookie';
 import { actorFromRequest } from '@/lib/auth/request';
-import { addToken, listTokens, revokeToken } from '@/lib/services/tokens';
+import { addToken, listTokens, MOST_TOKENS, revokeToken } from '@/lib/services/tokens';
 import { testDatabase } from '../../db/test-database';
 import { actorOf, addLaboratory, addPerson, logOf, newActor } from '../people-fixture';
 
@@ -125,6 +125,15 @@ describe('a token', () => {
     expect(await bearer(`${three.token.slice(0, -1)}!`)).toBeNull();
     await db('laboratories').where({ id: mill }).update({ is_active: false });
     expect(await bearer(three.token)).toBeNull();
+  });
+
+  it('is one of a limited number in force', async () => {
+    const actor = await newActor(db, { name: 'Mo Weir', roles: [['lab_manager', mill]] });
+    const first = await addToken(actor, input);
+    for (let count = 1; count < MOST_TOKENS; count += 1) await addToken(actor, input);
+    await expect(addToken(actor, input)).rejects.toMatchObject({ code: 'conflict' });
+    await revokeToken(actor, first.id);
+    await expect(addToken(actor, input)).resolves.toMatchObject({ name: 'LIMS' });
   });
 
   it('that is wrong is not made good by a cookie beside it', async () => {

@@ -111,4 +111,17 @@ it('counts guesses made at the same moment', async () => {
 it('does not log a password typed into the field for the e-mail', async () => {
   await signIn({ email: PASSWORD, password: 'x' }).catch(() => null);
   expect(JSON.stringify(await logOf(db))).not.toContain('dust');
+  expect(await db('sign_in_attempts').select()).toEqual([]);
+});
+
+it('keeps nothing of an e-mail or a password that no one can have', async () => {
+  const tries = [
+    { email: `${'x'.repeat(300)}@basin.example`, password: PASSWORD },
+    { email: EMAIL, password: 'x'.repeat(100_000) },
+  ];
+  for (const credentials of tries) {
+    await expect(signIn(credentials)).rejects.toMatchObject({ code: 'invalid' });
+  }
+  expect(await db('sign_in_attempts').select()).toEqual([]);
+  expect(JSON.stringify(await logOf(db))).not.toContain('xxx');
 });
