@@ -1,5 +1,5 @@
 import * as z from 'zod';
-import { requiredText } from './fields';
+import { requiredNote, requiredText } from './fields';
 
 const REASON_LENGTH = 500;
 
@@ -9,4 +9,4 @@ export const ownRoundSchema = z.object({
   laboratory: z.coerce.number({ error: 'Choose the laboratory.' }).int().positive(),
 });
 
-export const declineSchema = ownRoundSchema.extend({ reason: requiredText('a reason', REASON_LENGTH) });
+export const declineSchema = ownRoundSchema.extend({ reason: requiredNote('a reason', REASON_LENGTH) });

@@ -1,5 +1,5 @@
 import { expect, it } from 'vitest';
-import { checkbox } from '@/lib/schemas/fields';
+import { checkbox, requiredNote, requiredText } from '@/lib/schemas/fields';
 import { roundMeasurandSchema, roundSchema } from '@/lib/schemas/rounds';
 import {
   addRoundMeasurand,
@@ -14,6 +14,7 @@ import {
 } from '@/lib/services/round-plan';
 import { openRound } from '@/lib/services/round-steps';
 import { testDatabase } from '../db/test-database';
+import { openWithManagers } from './laboratory-fixture';
 import { inDays, logOf, planRound, ROUND } from './round-fixture';
 
 const ITEM = { code: 'M2', name: 'Ground maize, high', matrix: '', handling: '' };
@@ -92,6 +93,50 @@ it('fixes the plan once the round is open; only the later dates and the instruct
     publishAt: change.publishAt,
     instructions: 'Two replicates.',
   });
+});
+
+it('holds the dates of an open round against those that are stored, and tells of a new closing date', async () => {
+  const db = await testDatabase();
+  const open = await openWithManagers(db, 1);
+  const old = {
+    opensAt: inDays(-40),
+    dispatchAt: inDays(-40),
+    closesAt: inDays(-30),
+    publishAt: inDays(-20),
+  };
+  await expect(changeRound(open.coordinator, open.round, { ...ROUND, ...old })).rejects.toMatchObject({
+    code: 'invalid',
+    fieldErrors: { closesAt: 'The close must not be before the dispatch.' },
+  });
+  for (const days of [22, 23, 22]) {
+    await changeRound(open.coordinator, open.round, { ...ROUND, closesAt: inDays(days) });
+  }
+  const { closesAt } = await getRound(open.round);
+  await changeRound(open.coordinator, open.round, { ...ROUND, closesAt, instructions: 'Two.' });
+  expect(await db('outbox').where('subject', 'New closing date of Maize 1')).toHaveLength(3);
+});
+
+it('takes a fee in whole cents', () => {
+  const form = {
+    name: 'Maize 2',
+    opensAt: '2027-01-04',
+    dispatchAt: '2027-01-04',
+    closesAt: '2027-01-04',
+    publishAt: '2027-01-04',
+  };
+  expect(roundSchema.parse({ ...form, fee: '0.29' }).feeCents).toBe(29);
+  expect(roundSchema.parse({ ...form, fee: '999999,99' }).feeCents).toBe(99_999_999);
+  expect(roundSchema.safeParse({ ...form, fee: '1.005' }).error?.issues).toMatchObject([{ path: ['fee'] }]);
+});
+
+it('takes names in one line and reasons in several', () => {
+  for (const name of ['Mill\nClick here: http://evil.example', 'a\u0000b', 'a\u202eb', 'a\u2028b']) {
+    expect(requiredText('a name').safeParse(name).success, JSON.stringify(name)).toBe(false);
+    expect(requiredNote('a reason', 500).safeParse(name).success).toBe(true);
+  }
+  expect(requiredText('a name').parse(' M\u00fchle Nord & S\u00f6hne \n')).toBe(
+    'M\u00fchle Nord & S\u00f6hne',
+  );
 });
 
 it('reads the dates of a form as UTC and wants them in order', () => {

@@ -1,10 +1,12 @@
 import { expect, it } from 'vitest';
 import { addRound, dropTestItem, getRound, getRoundPlan } from '@/lib/services/round-plan';
 import { getRoundOverview } from '@/lib/services/round-overview';
-import { enrolLaboratories } from '@/lib/services/enrolments';
+import { enrolLaboratories, moveEnrolment } from '@/lib/services/enrolments';
 import { evaluateRound } from '@/lib/services/evaluate-round';
 import { cancelRound, closeRound, openRound, publishRound } from '@/lib/services/round-steps';
+import { listRounds } from '@/db/views/round-list-view';
 import { testDatabase } from '../db/test-database';
+import { csvOf, openWithManagers, publish, send } from './laboratory-fixture';
 import { addLaboratory, addPerson } from './people-fixture';
 import { inDays, loadResults, logOf, openWithLaboratories, planRound, ROUND } from './round-fixture';
 
@@ -49,6 +51,11 @@ it.each([
   expect(mail.map(({ subject }) => subject)).toEqual(subjects);
 });
 
+async function subjects(db: Awaited<ReturnType<typeof testDatabase>>): Promise<string[]> {
+  const mail: { subject: string }[] = await db('outbox').orderBy('id').select('subject');
+  return mail.map(({ subject }) => subject);
+}
+
 it('takes each step only from the state before it', async () => {
   const db = await testDatabase();
   const { coordinator, round } = await planRound(db);
@@ -90,6 +97,45 @@ it('keeps a cancelled round with its reason and tells the participants of an ope
   expect(mail.some(({ body }) => body.includes('The material was not stable.'))).toBe(true);
   await expect(openRound(coordinator, round)).rejects.toMatchObject({ code: 'blocked' });
   expect((await logOf(db)).at(-1)).toBe('round.cancelled');
+});
+
+it('tells those who were invited while the round was being planned that it is cancelled', async () => {
+  const db = await testDatabase();
+  const { coordinator, round } = await planRound(db);
+  const laboratoryId = await addLaboratory(db, 'Mill 1');
+  await addPerson(db, { name: 'Mira Voss', roles: [['lab_manager', laboratoryId]] });
+  await enrolLaboratories(coordinator, round, [laboratoryId], 'invited');
+  await cancelRound(coordinator, round, 'No material.');
+  expect(await subjects(db)).toEqual(['Invitation to Maize 1', 'Maize 1 is cancelled']);
+});
+
+it('writes of scores only to laboratories that took part', async () => {
+  const db = await testDatabase();
+  const open = await openWithManagers(db, 1);
+  const invited = await addLaboratory(db, 'Never answered');
+  await addPerson(db, { name: 'Nils Ohm', roles: [['lab_manager', invited]] });
+  await enrolLaboratories(open.coordinator, open.round, [invited], 'invited');
+  await send(open, 0, csvOf('8.4'));
+  await publish(db, open);
+  const told = await db('outbox').where('subject', 'like', 'Scores of%').select('to_address');
+  expect(told).toEqual([{ to_address: 'mona.1@basin.example' }]);
+});
+
+it('logs at the close who was missing and what the date was', async () => {
+  const db = await testDatabase();
+  const planned = await openWithLaboratories(db, 2);
+  await loadResults(planned, [10]);
+  await closeRound(planned.coordinator, planned.round);
+  const line = await db('audit_log').where({ action: 'round.closed' }).first('detail');
+  expect(line.detail).toBe(`1 of 2 had sent results; the closing date was ${ROUND.closesAt}`);
+});
+
+it('does not count what a laboratory sent before it was withdrawn', async () => {
+  const db = await testDatabase();
+  const planned = await openWithLaboratories(db, 2);
+  await loadResults(planned, [10, 11]);
+  await moveEnrolment(planned.coordinator, planned.round, planned.laboratoryIds[0] ?? 0, 'withdrawn', 'Lost');
+  expect(await listRounds(db)).toMatchObject([{ participantCount: 1, submittedCount: 1 }]);
 });
 
 it('leaves no trace of a step that was refused', async () => {

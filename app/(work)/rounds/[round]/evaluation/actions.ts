@@ -3,7 +3,7 @@
 import { revalidatePath } from 'next/cache';
 import * as z from 'zod';
 import { dataAction, formAction } from '@/lib/action';
-import { optionalText, requiredText } from '@/lib/schemas/fields';
+import { optionalText, requiredNote, requiredText } from '@/lib/schemas/fields';
 import { FIGURES, getFigureWorking } from '@/lib/services/show-working';
 import { returnEvaluation, signEvaluation } from '@/lib/services/sign-evaluation';
 
@@ -24,7 +24,7 @@ export const signAction = formAction({
 
 export const returnAction = formAction({
   permission: 'round:sign',
-  schema: oneVersion.extend({ reason: requiredText('the reason', 2_000) }),
+  schema: oneVersion.extend({ reason: requiredNote('the reason', 2_000) }),
   run: async ({ round, version, reason }, { actor }) => {
     await returnEvaluation(actor, round, version, reason);
     revalidatePath('/rounds', 'layout');

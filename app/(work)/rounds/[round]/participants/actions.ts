@@ -3,7 +3,7 @@
 import { revalidatePath } from 'next/cache';
 import * as z from 'zod';
 import { formAction } from '@/lib/action';
-import { requiredText } from '@/lib/schemas/fields';
+import { requiredNote, requiredText } from '@/lib/schemas/fields';
 import { enrolLaboratories, moveEnrolment } from '@/lib/services/enrolments';
 
 const inRound = z.object({ round: requiredText('the round') });
@@ -26,7 +26,7 @@ export const addLaboratoriesAction = formAction({
 
 export const withdrawAction = formAction({
   permission: 'enrolment:edit',
-  schema: oneLaboratory.extend({ reason: requiredText('the reason', 500) }),
+  schema: oneLaboratory.extend({ reason: requiredNote('the reason', 500) }),
   run: async ({ round, laboratory, reason }, { actor }) => {
     await moveEnrolment(actor, round, laboratory, 'withdrawn', reason);
     revalidatePath(`/rounds/${round}`, 'layout');
