@@ -50,3 +50,14 @@ it('refuses the Horwitz function for a unit that is no mass fraction', () => {
   const form = { code: 'ATR', name: 'Atrazine', unit: 'ug/L', decimals: '3', sigmaRule: 'horwitz' };
   expect(measurandSchema.safeParse(form).error?.issues[0]?.message).toContain('needs a mass fraction');
 });
+
+it('takes one of two measurands with the same code that are added at the same moment', async () => {
+  const db = await testDatabase();
+  const { coordinator, scheme } = await planRound(db);
+  const adding = ['DON', 'don'].map((code) => addMeasurand(coordinator, scheme, { ...MEASURAND, code }));
+  const outcomes = await Promise.allSettled(adding);
+  expect(outcomes.map(({ status }) => status).sort()).toEqual(['fulfilled', 'rejected']);
+  expect(outcomes.find(({ status }) => status === 'rejected')).toMatchObject({
+    reason: { code: 'conflict' },
+  });
+});

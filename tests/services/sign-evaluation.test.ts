@@ -79,6 +79,14 @@ it('does not count the signature of a version that was followed by another', asy
   await expect(publishRound(coordinator, round)).rejects.toMatchObject({ code: 'blocked' });
 });
 
+it('takes one signature of each reviewer', async () => {
+  const db = await testDatabase();
+  const { reviewer, round } = await evaluatedRound(db);
+  await signEvaluation(reviewer, round, 1, '');
+  await expect(signEvaluation(reviewer, round, 1, '')).rejects.toMatchObject({ code: 'conflict' });
+  expect(await db('sign_offs').select('id')).toHaveLength(1);
+});
+
 it('shows what was signed even when the scheme has changed since', async () => {
   const db = await testDatabase();
   const { coordinator, scheme, round } = await evaluatedRound(db);
