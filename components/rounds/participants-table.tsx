@@ -8,6 +8,7 @@ import { CONTROL_STYLE } from '@/components/ui/field';
 import { StateTag, type EnrolmentStateName } from '@/components/ui/state-tag';
 import { Table, Td, Th } from '@/components/ui/table';
 import { formatCount, formatDateTime } from '@/lib/format';
+import { neutraliseCell } from '@/lib/results-file/neutralise';
 
 export interface ParticipantRow {
   laboratoryId: number;
@@ -207,7 +208,7 @@ function asText(rows: readonly ParticipantRow[], showsNames: boolean): string {
   ];
   const lines = rows.map((row) => [
     row.participantCode,
-    ...(showsNames ? [(row.laboratoryName ?? '').replace(/^(?=[=+\-@])/, "'")] : []),
+    ...(showsNames ? [neutraliseCell(row.laboratoryName ?? '')] : []),
     row.state,
     ...(showsNames ? [row.itemsReceivedAt ?? '', row.submittedAt ?? ''] : []),
   ]);

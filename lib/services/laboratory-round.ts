@@ -6,11 +6,17 @@ import { findLaboratoryRound, type LaboratoryRound } from '@/db/views/laboratory
 import { listOwnReceipts, type ReceiptHead } from '@/db/views/receipt-view';
 import { notFound } from '@/lib/errors';
 
+/** What a laboratory is asked for. How it will be evaluated, and a value stated beforehand above all, is not in it. */
+export type AskedMeasurand = Pick<
+  RoundMeasurand,
+  'id' | 'testItemId' | 'code' | 'name' | 'unit' | 'decimals' | 'replicates'
+>;
+
 export interface OwnRound {
   round: LaboratoryRound;
   /** Empty while the provider is still planning. */
   items: TestItem[];
-  measurands: RoundMeasurand[];
+  measurands: AskedMeasurand[];
   receipts: ReceiptHead[];
   /** Null when results are taken; else why not, in words. */
   whyNoResults: string | null;
@@ -26,7 +32,17 @@ export async function getOwnRound(slug: string, laboratoryId: number, now: strin
     isPlanned ? [] : listRoundMeasurands(db(), round.id),
     listOwnReceipts(db(), { slug, laboratoryId }),
   ]);
-  return { round, items, measurands, receipts, whyNoResults: whyNoResults(round, now) };
+  return {
+    round,
+    items,
+    measurands: measurands.map(askedOf),
+    receipts,
+    whyNoResults: whyNoResults(round, now),
+  };
+}
+
+function askedOf({ id, testItemId, code, name, unit, decimals, replicates }: RoundMeasurand): AskedMeasurand {
+  return { id, testItemId, code, name, unit, decimals, replicates };
 }
 
 function whyNoResults(round: LaboratoryRound, now: string): string | null {

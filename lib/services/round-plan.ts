@@ -25,6 +25,7 @@ import { roundStateWords } from '@/lib/rules/round-states';
 import type { RoundInput, RoundMeasurandInput, TestItemInput } from '@/lib/schemas/rounds';
 import { freeSlug, slugify } from '@/lib/slug';
 import { massFractionPerUnit } from '@/lib/units';
+import { defaultPlan } from './plan-defaults';
 import { mailParticipants } from './round-mail';
 
 /** Names that stand for pages below /rounds. */
@@ -188,16 +189,7 @@ async function addWithSchemeDefaults(
     testItemId,
     measurandId,
     position: measurand.position,
-    replicates: 1,
-    assignedMethod: 'algorithm-a',
-    statedValue: null,
-    statedUncertainty: null,
-    statedSource: null,
-    sigmaRule: measurand.sigmaRule,
-    sigmaValue: measurand.sigmaValue,
-    sigmaPercent: measurand.sigmaPercent,
-    scoreKind: 'z',
-    zPrimeWhenNeeded: true,
+    ...defaultPlan(measurand),
   });
 }
 

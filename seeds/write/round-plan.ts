@@ -4,6 +4,7 @@ import { createRoundMeasurand, type RoundMeasurandPlan } from '@/db/round-measur
 import { createRound } from '@/db/round-store';
 import { createTestItem } from '@/db/test-item-store';
 import type { Measurand } from '@/db/measurand-store';
+import { defaultPlan } from '@/lib/services/plan-defaults';
 import { HANDLING, INSTRUCTIONS, type PlannedItem } from '../scenario/items';
 import type { MeasurandCode } from '../scenario/methods';
 import type { DemoRound } from '../scenario/rounds';
@@ -75,17 +76,5 @@ function measurandPlan(
   measurand: Measurand,
   choice: Partial<RoundMeasurandPlan> = {},
 ): RoundMeasurandPlan {
-  return {
-    replicates: round.replicates,
-    assignedMethod: 'algorithm-a',
-    statedValue: null,
-    statedUncertainty: null,
-    statedSource: null,
-    sigmaRule: measurand.sigmaRule,
-    sigmaValue: measurand.sigmaValue,
-    sigmaPercent: measurand.sigmaPercent,
-    scoreKind: 'z',
-    zPrimeWhenNeeded: true,
-    ...choice,
-  };
+  return { ...defaultPlan(measurand), replicates: round.replicates, ...choice };
 }

@@ -31,6 +31,18 @@ describe("a laboratory's own round", () => {
     }
   });
 
+  it('tells nothing of how it will be evaluated, and no value stated beforehand', async () => {
+    const db = await testDatabase();
+    const open = await openWithManagers(db, 1);
+    await db('round_measurands').update({
+      assigned_method: 'stated',
+      stated_value: 77.125,
+      stated_source: 'Spiked',
+    });
+    const text = JSON.stringify(await getOwnRound(open.round, at(open, 0).laboratoryId, now()));
+    for (const secret of ['77.125', 'Spiked', 'stated', 'sigma']) expect(text).not.toContain(secret);
+  });
+
   it('is not found without a part in it', async () => {
     const db = await testDatabase();
     const open = await openWithManagers(db, 1);
