@@ -26,19 +26,30 @@ export function checkFinite(caller: string, name: string, value: number): void {
   }
 }
 
+function withArticle(name: string): string {
+  return `${/^[aeiou]/.test(name) ? 'an' : 'a'} ${name}`;
+}
+
 /** Throws unless the number is finite and above zero; zero itself is `no-spread`. */
 export function checkPositive(caller: string, name: string, value: number): void {
   checkFinite(caller, name, value);
-  if (value === 0) throw new StatsError('no-spread', `${caller} requires a ${name} above zero, found 0`);
+  if (value === 0)
+    throw new StatsError('no-spread', `${caller} requires ${withArticle(name)} above zero, found 0`);
   if (value < 0)
-    throw new StatsError('out-of-domain', `${caller} requires a ${name} above zero, found ${value}`);
+    throw new StatsError(
+      'out-of-domain',
+      `${caller} requires ${withArticle(name)} above zero, found ${value}`,
+    );
 }
 
 /** Throws unless the number is finite and not negative. */
 export function checkNotNegative(caller: string, name: string, value: number): void {
   checkFinite(caller, name, value);
   if (value < 0) {
-    throw new StatsError('out-of-domain', `${caller} requires a ${name} of zero or more, found ${value}`);
+    throw new StatsError(
+      'out-of-domain',
+      `${caller} requires ${withArticle(name)} of zero or more, found ${value}`,
+    );
   }
 }
 
