@@ -77,6 +77,11 @@ export function formatRelativeDays(iso: string | null | undefined, now: string):
   return days > 0 ? `in ${days} days` : `${-days} days ago`;
 }
 
+/** A unit as it is printed: the UCUM code with the micro sign in place of its u. */
+export function formatUnit(code: string): string {
+  return code.replace(/(^|[/.(])u(?=[glmL])/g, '$1\u00b5');
+}
+
 /** Decimal units, as file managers and network tools use them: 1 kB is 1000 bytes. */
 export function formatBytes(bytes: number): string {
   if (!Number.isFinite(bytes) || bytes < 0) return ABSENT;

@@ -1,5 +1,5 @@
 import { Table, Td, Th } from '@/components/ui/table';
-import { formatCount } from '@/lib/format';
+import { formatCount, formatUnit } from '@/lib/format';
 
 export interface ItemRow {
   id: number;
@@ -68,7 +68,7 @@ function ToMeasure({ measurands }: { measurands: readonly ItemMeasurand[] }) {
     <ul>
       {measurands.map((entry) => (
         <li key={entry.id}>
-          <span className="font-semibold">{entry.code}</span> {entry.name}, {entry.unit}
+          <span className="font-semibold">{entry.code}</span> {entry.name}, {formatUnit(entry.unit)}
           {entry.replicates > 1 && `, ${formatCount(entry.replicates, 'replicate')}`}
         </li>
       ))}

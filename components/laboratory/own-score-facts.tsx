@@ -1,7 +1,8 @@
+import { Symbols } from '@/components/ui/symbols';
 import type { ReactNode } from 'react';
 import { Facts, type Fact } from '@/components/ui/facts';
 import { Signal } from '@/components/ui/signal';
-import { formatCount, formatNumber, formatScore } from '@/lib/format';
+import { formatCount, formatNumber, formatScore, formatUnit } from '@/lib/format';
 import type { OwnEntry } from './own-score-row';
 import { censoredText, whyNotScored } from './own-score-row';
 import { FINER } from './own-scores-table';
@@ -32,25 +33,25 @@ export function OwnScoreFacts({ entry, workings }: OwnScoreFactsProps) {
   const { plan, evaluation, scored, censored } = entry;
   const { assigned, sigmaPt, scoreKind } = evaluation;
   const inUnit = (value: number | null, finer: number) =>
-    value === null ? '\u2013' : `${formatNumber(value, plan.decimals + finer)} ${plan.unit}`;
+    value === null ? '\u2013' : `${formatNumber(value, plan.decimals + finer)} ${formatUnit(plan.unit)}`;
   const own = scored
     ? inUnit(scored.value, 0)
     : censored
-      ? `${censoredText(censored, plan.decimals)} ${plan.unit}`
+      ? `${censoredText(censored, plan.decimals)} ${formatUnit(plan.unit)}`
       : 'nothing reported';
   const facts: Fact[] = [
     { label: 'Your result', value: own },
     {
-      label: 'Assigned value x_pt',
+      label: <Symbols>Assigned value x_pt</Symbols>,
       value: withWorking(inUnit(assigned.value, FINER.assigned), workings.assigned),
       hint: assigned.reason ?? `${METHODS[assigned.method]}${countWords(assigned.count)}`,
     },
     {
-      label: 'Standard uncertainty u(x_pt)',
+      label: <Symbols>Standard uncertainty u(x_pt)</Symbols>,
       value: withWorking(inUnit(assigned.standardUncertainty, FINER.spread), workings.uncertainty),
     },
     {
-      label: 'sigma_pt',
+      label: <Symbols>sigma_pt</Symbols>,
       value: withWorking(inUnit(sigmaPt.value, FINER.spread), workings.sigma),
       hint: sigmaPt.reason ?? RULES[sigmaPt.rule],
     },
@@ -64,7 +65,13 @@ export function OwnScoreFacts({ entry, workings }: OwnScoreFactsProps) {
           why={whyNotScored(scored, censored)}
         />
       ),
-      hint: scored?.score === null || !scored ? whyNotScored(scored, censored) : evaluation.scoreKindReason,
+      hint: (
+        <Symbols>
+          {(scored?.score === null || !scored
+            ? whyNotScored(scored, censored)
+            : evaluation.scoreKindReason) ?? ''}
+        </Symbols>
+      ),
     },
     { label: 'Difference D', value: inUnit(scored?.D ?? null, 0) },
     {

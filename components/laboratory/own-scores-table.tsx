@@ -1,8 +1,9 @@
+import { Symbols } from '@/components/ui/symbols';
 import Link from 'next/link';
 import { Figures } from '@/components/ui/figures';
 import { Signal, type SignalKind } from '@/components/ui/signal';
 import { NumberCell, Table, Td, Th } from '@/components/ui/table';
-import { formatNumber, showMinus, type ScoreKind } from '@/lib/format';
+import { formatNumber, formatUnit, showMinus, type ScoreKind } from '@/lib/format';
 import { SCORE_NAMES } from './score-names';
 
 /** One measurand of a published round with the laboratory's own figures. */
@@ -40,9 +41,15 @@ export function OwnScoresTable({ round, rows }: OwnScoresTableProps) {
             Score
           </Th>
           <Th numeric>Your result</Th>
-          <Th numeric>x_pt</Th>
-          <Th numeric>u(x_pt)</Th>
-          <Th numeric>sigma_pt</Th>
+          <Th numeric>
+            <Symbols>x_pt</Symbols>
+          </Th>
+          <Th numeric>
+            <Symbols>u(x_pt)</Symbols>
+          </Th>
+          <Th numeric>
+            <Symbols>sigma_pt</Symbols>
+          </Th>
           <Th>Unit</Th>
           <Th numeric>D%</Th>
         </tr>
@@ -68,7 +75,7 @@ export function OwnScoresTable({ round, rows }: OwnScoresTableProps) {
             <NumberCell value={row.assigned} decimals={row.decimals + FINER.assigned} />
             <NumberCell value={row.assignedUncertainty} decimals={row.decimals + FINER.spread} />
             <NumberCell value={row.sigmaPt} decimals={row.decimals + FINER.spread} />
-            <Td>{row.unit}</Td>
+            <Td>{formatUnit(row.unit)}</Td>
             <Td numeric>
               <Figures value={row.dPercent} decimals={1} />
             </Td>

@@ -28,7 +28,10 @@ export function ReceiptList({ round, receipts }: ReceiptListProps) {
       </thead>
       <tbody>
         {receipts.map((receipt) => (
-          <tr key={receipt.receiptCode} className={receipt.state === 'submitted' ? OWN_ROW : undefined}>
+          <tr
+            key={receipt.receiptCode}
+            className={receipts.length > 1 && receipt.state === 'submitted' ? OWN_ROW : undefined}
+          >
             <Th scope="row" className="figures align-top">
               <Link
                 href={`/laboratory/rounds/${round}/receipts/${receipt.receiptCode}`}

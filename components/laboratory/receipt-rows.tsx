@@ -1,6 +1,6 @@
 import { columnDecimals } from '@/components/ui/figures';
 import { NumberCell, Table, Td, Th } from '@/components/ui/table';
-import { formatDate, formatSignificant } from '@/lib/format';
+import { formatDate, formatSignificant, formatUnit } from '@/lib/format';
 
 export interface ReceiptResult {
   line: number;
@@ -59,7 +59,7 @@ export function ReceiptRows({ rows }: { rows: readonly ReceiptResult[] }) {
               {row.kind === 'not-measured' ? 'not measured' : `${row.resultText} ${ownUnit(row)}`}
             </Td>
             <NumberCell value={taken[index] ?? null} columnDecimals={width} />
-            <Td>{row.unit}</Td>
+            <Td>{formatUnit(row.unit)}</Td>
             {withUncertainty && (
               <Td numeric className="tabular-nums">
                 {row.uncertaintyText}

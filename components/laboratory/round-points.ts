@@ -1,3 +1,4 @@
+import { formatUnit } from '@/lib/format';
 import type { ResultPoint, ScorePoint } from '@/components/charts/chart-types';
 import type { DataColumn, DataRow } from '@/components/ui/data-table';
 import type { MeasurandEvaluation } from '@/lib/stats';
@@ -39,7 +40,7 @@ export function codesTable(
 ): { columns: DataColumn[]; rows: DataRow[]; sortBy: { key: string } } {
   const columns: DataColumn[] = [
     { key: 'code', label: 'Code', kind: 'text' },
-    { key: 'result', label: `Result in ${unit}`, kind: 'number', decimals },
+    { key: 'result', label: `Result in ${formatUnit(unit)}`, kind: 'number', decimals },
     { key: 'dPercent', label: 'D%', kind: 'number', decimals: 1 },
     {
       key: 'score',

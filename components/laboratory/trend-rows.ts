@@ -1,6 +1,6 @@
 import type { TrendPoint as ChartPoint } from '@/components/charts/chart-types';
 import type { DataColumn, DataRow } from '@/components/ui/data-table';
-import { formatDate, type ScoreKind } from '@/lib/format';
+import { formatDate, formatUnit, type ScoreKind } from '@/lib/format';
 import { SCORE_NAMES } from './score-names';
 
 export interface TrendScore {
@@ -57,7 +57,7 @@ export function trendTable(
     { key: 'kind', label: 'Kind', kind: 'text' },
     { key: 'closes', label: 'Results due', kind: 'date' },
     { key: 'item', label: 'Item', kind: 'text' },
-    { key: 'value', label: `Your result in ${unit}`, kind: 'number', decimals },
+    { key: 'value', label: `Your result in ${formatUnit(unit)}`, kind: 'number', decimals },
     { key: 'assigned', label: 'x_pt', kind: 'number', decimals: decimals + 1 },
     { key: 'sigma', label: 'sigma_pt', kind: 'number', decimals: decimals + 2 },
   ];

@@ -1,3 +1,4 @@
+import { formatUnit } from '@/lib/format';
 import type { ReactNode } from 'react';
 import { Figures } from '@/components/ui/figures';
 import { Table, Td, Th } from '@/components/ui/table';
@@ -58,7 +59,7 @@ export function EstimatesTable({ robust, unit, decimals, working }: EstimatesTab
   const digits = statisticDecimals(decimals);
   return (
     <Table
-      caption={`Estimates from ${robust.count} results, in ${unit}`}
+      caption={`Estimates from ${robust.count} results, in ${formatUnit(unit)}`}
       fullHeight
       className="max-w-measure"
     >

@@ -1,6 +1,7 @@
+import { Symbols } from '@/components/ui/symbols';
 import type { ReactNode } from 'react';
 import { Facts, type Fact } from '@/components/ui/facts';
-import { formatNumber } from '@/lib/format';
+import { formatNumber, formatUnit } from '@/lib/format';
 import { SIGMA_RULE_NAMES } from '@/lib/schemas/schemes';
 import { ASSIGNED_METHOD_NAMES } from '@/lib/schemas/rounds';
 import type { MeasurandEvaluation } from '@/lib/stats/evaluation/types';
@@ -21,7 +22,7 @@ export function EvaluationFacts({ evaluation, plan, working }: EvaluationFactsPr
   const { assigned, sigmaPt, negligibleUncertainty: check, counts } = evaluation;
   const digits = statisticDecimals(plan.decimals);
   const withUnit = (value: number | null) =>
-    value === null ? 'not available' : `${formatNumber(value, digits)} ${plan.unit}`;
+    value === null ? 'not available' : `${formatNumber(value, digits)} ${formatUnit(plan.unit)}`;
   const figure = (
     key: FactFigure,
     name: string,
@@ -29,7 +30,7 @@ export function EvaluationFacts({ evaluation, plan, working }: EvaluationFactsPr
     isThere: boolean,
     hint?: ReactNode,
   ): Fact => ({
-    label: name,
+    label: <Symbols>{name}</Symbols>,
     value: (
       <>
         {value}
@@ -76,15 +77,19 @@ export function EvaluationFacts({ evaluation, plan, working }: EvaluationFactsPr
           check.ratio !== null,
           negligibleWords,
         ),
-        { label: 'Score', value: SCORE_NAMES[evaluation.scoreKind], hint: evaluation.scoreKindReason },
+        {
+          label: 'Score',
+          value: SCORE_NAMES[evaluation.scoreKind],
+          hint: <Symbols>{evaluation.scoreKindReason}</Symbols>,
+        },
         { label: 'Results', value: countWords(counts) },
         ...(sigmaPt.horRat === null
           ? []
           : [
               {
-                label: 'HorRat of sigma_pt',
+                label: <Symbols>HorRat of sigma_pt</Symbols>,
                 value: formatNumber(sigmaPt.horRat, HORRAT_DECIMALS),
-                hint: 'sigma_pt divided by the Horwitz value at x_pt',
+                hint: <Symbols>sigma_pt divided by the Horwitz value at x_pt</Symbols>,
               },
             ]),
       ]}

@@ -1,3 +1,4 @@
+import { formatUnit } from '@/lib/format';
 import { DistributionChart } from '@/components/charts/distribution-chart';
 import { OrderedScoresChart } from '@/components/charts/ordered-scores-chart';
 import type { MeasurandEvaluation } from '@/lib/stats/evaluation/types';
@@ -51,7 +52,7 @@ export function ResultsChart({ plan, evaluation }: ChartProps) {
         signal: entry.signal ?? 'not-scored',
       }))}
       assigned={{ value: assigned.value, sigmaPt: sigmaPt.value }}
-      unit={plan.unit}
+      unit={formatUnit(plan.unit)}
       decimals={plan.decimals}
       leftOut={censored.length}
       fileName={`results-${plan.itemCode}-${plan.code}`}

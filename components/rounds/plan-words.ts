@@ -1,3 +1,4 @@
+import { formatUnit } from '@/lib/format';
 import { ASSIGNED_METHOD_NAMES, SCORE_KIND_NAMES } from '@/lib/schemas/rounds';
 import { SIGMA_RULE_NAMES } from '@/lib/schemas/schemes';
 
@@ -9,7 +10,7 @@ export interface SigmaChoice {
 
 /** How sigma_pt is set, with its number. */
 export function sigmaWords(choice: SigmaChoice, unit: string): string {
-  if (choice.sigmaRule === 'prescribed') return `Prescribed: ${choice.sigmaValue} ${unit}`;
+  if (choice.sigmaRule === 'prescribed') return `Prescribed: ${choice.sigmaValue} ${formatUnit(unit)}`;
   if (choice.sigmaRule === 'percent') return `${choice.sigmaPercent} % of the assigned value`;
   return SIGMA_RULE_NAMES[choice.sigmaRule];
 }
@@ -22,8 +23,8 @@ export interface AssignedChoice {
 
 export function assignedWords(choice: AssignedChoice, unit: string): string {
   if (choice.assignedMethod !== 'stated') return ASSIGNED_METHOD_NAMES[choice.assignedMethod];
-  const u = choice.statedUncertainty === null ? '' : `, u = ${choice.statedUncertainty} ${unit}`;
-  return `Stated: ${choice.statedValue} ${unit}${u}`;
+  const u = choice.statedUncertainty === null ? '' : `, u = ${choice.statedUncertainty} ${formatUnit(unit)}`;
+  return `Stated: ${choice.statedValue} ${formatUnit(unit)}${u}`;
 }
 
 export interface ScoreChoice {

@@ -1,3 +1,4 @@
+import { formatUnit } from '@/lib/format';
 import { Figures } from '@/components/ui/figures';
 import { Signal } from '@/components/ui/signal';
 import { Table, Td, Th } from '@/components/ui/table';
@@ -22,8 +23,8 @@ export function ReportTable({ caption, evaluation, plan }: ReportTableProps) {
       <thead>
         <tr>
           <Th>Code</Th>
-          <Th numeric>Result ({plan.unit})</Th>
-          <Th numeric>D ({plan.unit})</Th>
+          <Th numeric>Result ({formatUnit(plan.unit)})</Th>
+          <Th numeric>D ({formatUnit(plan.unit)})</Th>
           <Th numeric>D%</Th>
           <Th numeric className="pr-24.5!">
             {SCORE_NAMES[scoreKind]}

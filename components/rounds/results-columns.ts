@@ -1,5 +1,5 @@
 import type { DataColumn, DataRow } from '@/components/ui/data-table';
-import { formatSignificant } from '@/lib/format';
+import { formatSignificant, formatUnit } from '@/lib/format';
 
 export interface ResultOfCode {
   participantCode: string;
@@ -49,7 +49,7 @@ export function resultsMatrix(
     { key: 'code', label: 'Code', kind: 'text' },
     ...measurands.map(({ id, itemCode, code, unit }) => ({
       key: String(id),
-      label: `${itemCode} ${code} (${unit})`,
+      label: `${itemCode} ${code} (${formatUnit(unit)})`,
       kind: 'number' as const,
     })),
   ];
@@ -81,10 +81,15 @@ export function resultsOfMeasurand(
     { key: 'code', label: 'Code', kind: 'text', of: (result) => result.participantCode },
     { key: 'replicate', label: 'Replicate', kind: 'number', of: (result) => result.replicate },
     { key: 'written', label: 'As written', kind: 'text', of: asWritten },
-    { key: 'value', label: `Result (${unit})`, kind: 'number', of: (result) => inPlanUnit(result, unit) },
+    {
+      key: 'value',
+      label: `Result (${formatUnit(unit)})`,
+      kind: 'number',
+      of: (result) => inPlanUnit(result, unit),
+    },
     {
       key: 'U',
-      label: `U (${unit})`,
+      label: `U (${formatUnit(unit)})`,
       kind: 'number',
       of: ({ expandedUncertainty }) =>
         expandedUncertainty === null ? null : formatSignificant(expandedUncertainty, DIGITS),
@@ -97,7 +102,7 @@ export function resultsOfMeasurand(
     },
     {
       key: 'loq',
-      label: `LOQ (${unit})`,
+      label: `LOQ (${formatUnit(unit)})`,
       kind: 'number',
       of: ({ loq }) => loq && formatSignificant(loq, DIGITS),
     },

@@ -1,5 +1,5 @@
 import type { DataColumn, DataRow } from '@/components/ui/data-table';
-import { formatPlainNumber } from '@/lib/format';
+import { formatPlainNumber, formatUnit } from '@/lib/format';
 import type {
   CensoredScore,
   JudgedScore,
@@ -58,11 +58,11 @@ export function scoreTable(
   const digits = statisticDecimals(plan.decimals);
   const columns: DataColumn[] = [
     { key: 'code', label: 'Code', kind: workingHref ? 'link' : 'text' },
-    { key: 'result', label: `Result (${plan.unit})`, kind: 'number', decimals: plan.decimals },
+    { key: 'result', label: `Result (${formatUnit(plan.unit)})`, kind: 'number', decimals: plan.decimals },
     ...(hasUncertainty
-      ? [{ key: 'u', label: `u(x) (${plan.unit})`, kind: 'number' as const, decimals: digits }]
+      ? [{ key: 'u', label: `u(x) (${formatUnit(plan.unit)})`, kind: 'number' as const, decimals: digits }]
       : []),
-    { key: 'D', label: `D (${plan.unit})`, kind: 'number', decimals: digits },
+    { key: 'D', label: `D (${formatUnit(plan.unit)})`, kind: 'number', decimals: digits },
     { key: 'dPercent', label: 'D%', kind: 'number', decimals: 1 },
     { key: 'score', label: SCORE_NAMES[scoreKind], kind: 'score', scoreKind },
     ...others.map(({ kind, key }) => ({

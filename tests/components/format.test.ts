@@ -12,6 +12,7 @@ import {
   formatScore,
   formatSignificant,
   formatTime,
+  formatUnit,
   showMinus,
 } from '@/lib/format';
 
@@ -59,6 +60,7 @@ describe('numbers', () => {
 
   it('counts decimals as written', () => {
     expect([countDecimals('12'), countDecimals('<2.0'), countDecimals('1.250e3')]).toEqual([0, 1, 3]);
+    expect(countDecimals('3715 (3.715 mg/kg)')).toBe(0);
   });
 
   it('rounds to significant digits', () => {
@@ -116,6 +118,16 @@ describe('sizes and counts', () => {
     [-1, '\u2013'],
   ])('writes %d as "%s"', (bytes, text) => {
     expect(formatBytes(bytes)).toBe(text);
+  });
+
+  it.each([
+    ['ug/kg', '\u00b5g/kg'],
+    ['ng/ug', 'ng/\u00b5g'],
+    ['mg/uL', 'mg/\u00b5L'],
+    ['mg/kg', 'mg/kg'],
+    ['1', '1'],
+  ])('prints the unit %s as %s', (code, text) => {
+    expect(formatUnit(code)).toBe(text);
   });
 
   it('uses the plural it is given', () => {

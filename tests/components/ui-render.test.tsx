@@ -14,8 +14,10 @@ import { SiteHeader } from '@/components/ui/site-header';
 import { Skeleton } from '@/components/ui/skeleton';
 import { StateTag } from '@/components/ui/state-tag';
 import { SubmitButton } from '@/components/ui/submit-button';
+import { Table, Td } from '@/components/ui/table';
 import { readTheme } from '@/components/ui/theme';
 import { ThemeSwitch } from '@/components/ui/theme-switch';
+import { Symbols } from '@/components/ui/symbols';
 import { Tooltip } from '@/components/ui/tooltip';
 
 describe('buttons', () => {
@@ -195,5 +197,31 @@ describe('page parts', () => {
       'system',
       'system',
     ]);
+  });
+});
+
+describe('symbols', () => {
+  it('set x_pt and sigma_pt with their index and leave the rest alone', () => {
+    const html = render(<Symbols>u(x_pt) is at most 0.3 sigma_pt</Symbols>);
+    expect(html).toBe(
+      'u(<span class="symbol">x<sub>pt</sub></span>) is at most 0.3 <span class="symbol">\u03c3<sub>pt</sub></span>',
+    );
+    expect(render(<Symbols>no figure was reported</Symbols>)).toBe('no figure was reported');
+  });
+});
+
+describe('stacked tables', () => {
+  it('name the column of each cell for the narrow layout', () => {
+    const html = render(
+      <Table caption="Rounds" stacked>
+        <tbody>
+          <tr>
+            <Td label="State">open</Td>
+          </tr>
+        </tbody>
+      </Table>,
+    );
+    expect(html).toContain('stacked-table');
+    expect(html).toMatch(/<td[^>]*data-label="State"[^>]*>open<\/td>/);
   });
 });

@@ -1,3 +1,5 @@
+import { Symbols } from '@/components/ui/symbols';
+import { formatUnit } from '@/lib/format';
 import type { ReactNode } from 'react';
 import { sigmaWords } from '@/components/rounds/plan-words';
 import { Table, Td, Th } from '@/components/ui/table';
@@ -19,7 +21,9 @@ export function MeasurandTable({
           <Th>Unit</Th>
           <Th numeric>Decimals</Th>
           <Th>Decision limit</Th>
-          <Th>sigma_pt</Th>
+          <Th>
+            <Symbols>sigma_pt</Symbols>
+          </Th>
           {edit && (
             <Th>
               <span className="sr-only">Edit</span>
@@ -34,7 +38,7 @@ export function MeasurandTable({
               {measurand.code}
             </Th>
             <Td label="Name">{measurand.name}</Td>
-            <Td label="Unit">{measurand.unit}</Td>
+            <Td label="Unit">{formatUnit(measurand.unit)}</Td>
             <Td label="Decimals" numeric>
               {measurand.decimals}
             </Td>
@@ -43,14 +47,14 @@ export function MeasurandTable({
                 <span className="text-grey">none</span>
               ) : (
                 <>
-                  {measurand.decisionLimit} {measurand.unit}
+                  {measurand.decisionLimit} {formatUnit(measurand.unit)}
                   <span className="block text-sm text-ink-soft">
                     {measurand.decisionLimitSource ?? 'source not given'}
                   </span>
                 </>
               )}
             </Td>
-            <Td label="sigma_pt">{sigmaWords(measurand, measurand.unit)}</Td>
+            <Td label="σ pt">{sigmaWords(measurand, measurand.unit)}</Td>
             {edit && <Td className="text-right whitespace-nowrap">{edit(measurand)}</Td>}
           </tr>
         ))}

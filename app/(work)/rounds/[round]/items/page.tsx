@@ -3,7 +3,7 @@ import { ButtonLink } from '@/components/ui/button';
 import { EmptyState } from '@/components/ui/empty-state';
 import { Facts } from '@/components/ui/facts';
 import { requirePageActor } from '@/lib/auth/guards';
-import { formatCount, formatDateTime } from '@/lib/format';
+import { formatCount, formatDateTime, formatUnit } from '@/lib/format';
 import { listParticipantsFor } from '@/lib/services/participant-key';
 import { getRoundPlan, type PlannedItem, type PlannedMeasurand } from '@/lib/services/round-plan';
 import { loadRound } from '../load-round';
@@ -82,7 +82,9 @@ function Item({ item, measurands, showHandling }: ItemProps) {
           { label: 'Matrix', value: item.matrix || 'not given' },
           {
             label: 'To be measured',
-            value: measurands.map((entry) => `${entry.code} in ${entry.unit}`).join(', ') || 'nothing yet',
+            value:
+              measurands.map((entry) => `${entry.code} in ${formatUnit(entry.unit)}`).join(', ') ||
+              'nothing yet',
           },
         ]}
       />

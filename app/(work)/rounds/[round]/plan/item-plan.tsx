@@ -1,3 +1,5 @@
+import { Symbols } from '@/components/ui/symbols';
+import { formatUnit } from '@/lib/format';
 import type { ReactNode } from 'react';
 import { ItemDialog } from '@/components/forms/item-dialog';
 import { MeasurandPlanDialog } from '@/components/forms/measurand-plan-dialog';
@@ -51,7 +53,9 @@ export function ItemPlan({ round, item, measurands, isDraft, children }: ItemPla
               <Th>Unit</Th>
               <Th numeric>Replicates</Th>
               <Th>Assigned value</Th>
-              <Th>sigma_pt</Th>
+              <Th>
+                <Symbols>sigma_pt</Symbols>
+              </Th>
               <Th>Score</Th>
               {isDraft && (
                 <Th>
@@ -87,7 +91,7 @@ function MeasurandRow({
       <Th scope="row">
         <span className="font-semibold">{entry.code}</span> {entry.name}
       </Th>
-      <Td label="Unit">{entry.unit}</Td>
+      <Td label="Unit">{formatUnit(entry.unit)}</Td>
       <Td label="Replicates" numeric>
         {entry.replicates}
       </Td>
@@ -95,11 +99,11 @@ function MeasurandRow({
         {assignedWords(entry, entry.unit)}
         {entry.statedSource && <span className="block text-sm text-ink-soft">{entry.statedSource}</span>}
       </Td>
-      <Td label="sigma_pt" className="min-w-40">
+      <Td label="σ pt" className="min-w-40">
         {sigmaWords(entry, entry.unit)}
       </Td>
       <Td label="Score" className="min-w-40">
-        {scoreWords(entry)}
+        <Symbols>{scoreWords(entry)}</Symbols>
       </Td>
       {isDraft && (
         <Td className="text-right whitespace-nowrap">

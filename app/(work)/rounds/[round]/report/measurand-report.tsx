@@ -1,3 +1,4 @@
+import { formatUnit } from '@/lib/format';
 import { EvaluationFacts } from '@/components/rounds/evaluation-facts';
 import { ScoresChart } from '@/components/rounds/measurand-charts';
 import { NotesList } from '@/components/rounds/notes-list';
@@ -11,7 +12,7 @@ export function MeasurandReport({ plan, evaluation }: EvaluatedPlan) {
       <h3 className="text-xl">{title}</h3>
       {plan.decisionLimit !== null && (
         <p className="max-w-measure">
-          Decision limit, as an example: {plan.decisionLimit} {plan.unit}.{' '}
+          Decision limit, as an example: {plan.decisionLimit} {formatUnit(plan.unit)}.{' '}
           <span className="text-ink-soft">{plan.decisionLimitSource ?? 'No source is given.'}</span>
         </p>
       )}

@@ -1,3 +1,4 @@
+import { formatUnit } from '@/lib/format';
 import { OrderedScoresChart } from '@/components/charts/ordered-scores-chart';
 import { RoundBars } from '@/components/charts/round-bars';
 import { codesTable, resultPoints, scorePoints } from '@/components/laboratory/round-points';
@@ -85,7 +86,7 @@ function Charts({ entry: { plan, evaluation }, ownCode }: PartProps) {
           title={`Where your result stands: ${what}`}
           results={resultPoints(evaluation, ownCode)}
           assigned={{ value: assigned.value, sigmaPt: sigmaPt.value }}
-          unit={plan.unit}
+          unit={formatUnit(plan.unit)}
           decimals={plan.decimals}
           leftOut={evaluation.censored.length}
           fileName={`${plan.itemCode}-${plan.code}-own-result`}

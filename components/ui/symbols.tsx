@@ -1,0 +1,23 @@
+import { Fragment, type ReactNode } from 'react';
+
+const NAMES = /\b(x_pt|sigma_pt)\b/;
+
+/** Text with the names of the field set as the charts set them: x and sigma with the index pt. */
+export function Symbols({ children }: { children: string }) {
+  const parts = children.split(NAMES);
+  return parts.map((part, index) => <Fragment key={index}>{index % 2 === 1 ? SET[part] : part}</Fragment>);
+}
+
+const SET: Record<string, ReactNode> = {
+  x_pt: (
+    <span className="symbol">
+      x<sub>pt</sub>
+    </span>
+  ),
+  sigma_pt: (
+    <span className="symbol">
+      {'\u03c3'}
+      <sub>pt</sub>
+    </span>
+  ),
+};
