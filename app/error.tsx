@@ -1,5 +1,6 @@
 'use client';
 
+import { BrandHeader } from './brand-header';
 import { ErrorMessage } from './error-message';
 
 export default function ErrorPage({
@@ -10,8 +11,11 @@ export default function ErrorPage({
   reset: () => void;
 }) {
   return (
-    <main id="main" className="mx-auto w-full max-w-page px-4 md:px-6">
-      <ErrorMessage error={error} retry={reset} home={{ href: '/', label: 'Front page' }} />
-    </main>
+    <>
+      <BrandHeader />
+      <main id="main" className="mx-auto w-full max-w-page px-4 md:px-6">
+        <ErrorMessage error={error} retry={reset} home={{ href: '/', label: 'Front page' }} />
+      </main>
+    </>
   );
 }

@@ -50,12 +50,12 @@ export default async function LaboratoriesPage({ searchParams }: PageProps<'/lab
 
 function LaboratoryTable({ laboratories, caption }: { laboratories: LaboratoryLine[]; caption: string }) {
   return (
-    <Table caption={caption} stacked>
+    <Table caption={caption}>
       <thead>
         <tr>
           <Th>Name</Th>
-          <Th>Kind</Th>
-          <Th>Town</Th>
+          <Th className="max-sm:hidden">Kind</Th>
+          <Th className="max-sm:hidden">Town</Th>
           <Th numeric>People</Th>
           <Th numeric>Rounds</Th>
         </tr>
@@ -68,13 +68,16 @@ function LaboratoryTable({ laboratories, caption }: { laboratories: LaboratoryLi
                 {laboratory.name}
               </Link>
               {!laboratory.isActive && <span className="text-ink-soft"> (no longer active)</span>}
+              <span className="block text-sm text-ink-soft sm:hidden">
+                {[laboratoryKindName(laboratory.kind), laboratory.town].filter(Boolean).join(', ')}
+              </span>
             </Th>
-            <Td label="Kind">{laboratoryKindName(laboratory.kind)}</Td>
-            <Td label="Town">{laboratory.town || '\u2013'}</Td>
-            <Td label="People" numeric className="figures">
+            <Td className="max-sm:hidden">{laboratoryKindName(laboratory.kind)}</Td>
+            <Td className="max-sm:hidden">{laboratory.town || '\u2013'}</Td>
+            <Td numeric className="figures">
               {laboratory.peopleCount}
             </Td>
-            <Td label="Rounds" numeric className="figures">
+            <Td numeric className="figures">
               {laboratory.roundCount}
             </Td>
           </tr>

@@ -1,3 +1,4 @@
+import Link from 'next/link';
 import { CheckForm } from '@/components/laboratory/check-form';
 import { Facts } from '@/components/ui/facts';
 import { Notice } from '@/components/ui/notice';
@@ -13,7 +14,7 @@ export default async function CheckedReceiptPage({ params }: PageProps<'/check/[
   const receipt = await findReceiptByCode(code);
   return (
     <>
-      <PageHeader title="Check a receipt" breadcrumb={[{ href: '/check', label: 'Another code' }]} />
+      <PageHeader title="Check a receipt" />
       {receipt ? <Genuine receipt={receipt} /> : <Unknown code={code} />}
     </>
   );
@@ -41,6 +42,11 @@ function Genuine({ receipt }: { receipt: PublicReceipt }) {
       <p className="max-w-measure text-ink-soft">
         The SHA-256 is a fingerprint of the file. If the file you hold has the same, it is the one that was
         received, byte for byte; <code className="text-sm">sha256sum</code> on a command line computes it.
+      </p>
+      <p>
+        <Link href="/check" className="text-link">
+          Check another code
+        </Link>
       </p>
     </>
   );
