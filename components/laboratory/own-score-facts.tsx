@@ -56,7 +56,7 @@ export function OwnScoreFacts({ entry, workings }: OwnScoreFactsProps) {
       hint: sigmaPt.reason ?? RULES[sigmaPt.rule],
     },
     {
-      label: `Score ${SCORE_NAMES[scoreKind]}`,
+      label: <Symbols>{`Score ${SCORE_NAMES[scoreKind]}`}</Symbols>,
       value: (
         <Signal
           score={scored?.score ?? null}
@@ -100,7 +100,10 @@ function otherScores({ evaluation, scored }: OwnEntry): Fact[] {
   for (const kind of ['z', 'z-prime', 'zeta', 'e-n'] as const) {
     const value = all[kind];
     if (kind === evaluation.scoreKind || value === null) continue;
-    facts.push({ label: `Beside it: ${SCORE_NAMES[kind]}`, value: formatScore(value, kind) });
+    facts.push({
+      label: <Symbols>{`Also computed: ${SCORE_NAMES[kind]}`}</Symbols>,
+      value: formatScore(value, kind),
+    });
   }
   if (scored.uncertaintyClass) {
     facts.push({ label: 'Your stated uncertainty', value: UNCERTAINTY[scored.uncertaintyClass] });

@@ -24,6 +24,7 @@ const DIGITS = 12;
 /** The rows of a submission: what the laboratory wrote beside what it was taken as. */
 export function ReceiptRows({ rows }: { rows: readonly ReceiptResult[] }) {
   const has = (of: (row: ReceiptResult) => unknown) => rows.some((row) => Boolean(of(row)));
+  const withReplicate = rows.some((row) => row.replicate > 1);
   const withUncertainty = has((row) => row.uncertaintyText);
   const withDate = has((row) => row.analysedOn);
   const withComment = has((row) => row.comment);
@@ -36,7 +37,7 @@ export function ReceiptRows({ rows }: { rows: readonly ReceiptResult[] }) {
           <Th numeric>Line</Th>
           <Th>Item</Th>
           <Th>Measurand</Th>
-          <Th numeric>Replicate</Th>
+          {withReplicate && <Th numeric>Replicate</Th>}
           <Th numeric>Result as written</Th>
           <Th numeric>Taken as</Th>
           <Th>Unit</Th>
@@ -54,7 +55,7 @@ export function ReceiptRows({ rows }: { rows: readonly ReceiptResult[] }) {
             </Td>
             <Td>{row.item}</Td>
             <Td>{row.measurand}</Td>
-            <Td numeric>{row.replicate}</Td>
+            {withReplicate && <Td numeric>{row.replicate}</Td>}
             <Td numeric className="tabular-nums">
               {row.kind === 'not-measured' ? 'not measured' : `${row.resultText} ${ownUnit(row)}`}
             </Td>

@@ -20,7 +20,7 @@ export function SignalAdvice({ signal, level = 3 }: SignalAdviceProps) {
   const isAction = signal === 'action';
   const Shape = isAction ? FilledSquare : OpenTriangle;
   return (
-    <section aria-label="What to do" className="max-w-measure border-y py-3">
+    <section aria-label="What to do" className="border-y py-3 *:max-w-measure">
       <Heading className="flex items-baseline gap-2 text-lg">
         <Shape />
         {isAction ? 'What to do about an action signal' : 'What to do about a warning signal'}

@@ -33,8 +33,8 @@ export function EvaluationFacts({ evaluation, plan, working }: EvaluationFactsPr
     label: <Symbols>{name}</Symbols>,
     value: (
       <>
+        {isThere && working && <span className="mr-2 font-normal">{working(key, name)}</span>}
         {value}
-        {isThere && working && <span className="ml-1 font-normal">{working(key, name)}</span>}
       </>
     ),
     hint,

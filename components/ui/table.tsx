@@ -56,7 +56,9 @@ export function Th({ numeric, className, scope = 'col', ...rest }: ComponentProp
         'px-3 py-1.5 first:pl-0 last:pr-0',
         // A border would scroll away under a sticky header; a shadow line moves with the cell.
         scope === 'col' &&
-          'sticky top-0 z-10 bg-paper align-bottom text-sm font-semibold text-ink-soft shadow-[inset_0_-1px_0_var(--rule-strong)]',
+          'sticky top-0 z-10 bg-paper align-bottom text-sm font-semibold text-ink-soft shadow-[inset_0_-1px_0_var(--rule-strong)] ' +
+            // Paper repeats the header by itself, and a stuck one would stay empty there.
+            'print:static print:border-b print:border-rule-strong print:shadow-none',
         scope === 'row' && 'border-b align-top font-normal',
         numeric && 'text-right',
         className,
