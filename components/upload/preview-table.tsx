@@ -71,7 +71,13 @@ function Cell({ cell, numeric }: { cell: PreviewCell | undefined; numeric: boole
   const isWrong = cell?.notes.some((note) => note.kind === 'problem') ?? false;
   return (
     <Td numeric={numeric} className={cx(isWrong && 'bg-paper-wash')}>
-      <span className={cx(numeric && 'tabular-nums', isWrong && 'font-semibold', 'wrap-anywhere')}>
+      <span
+        className={cx(
+          numeric && 'tabular-nums',
+          isWrong && 'font-semibold',
+          'inline-block max-w-96 wrap-break-word',
+        )}
+      >
         {cell?.text ?? ''}
       </span>
       {cell && <Notes notes={cell.notes} />}
