@@ -8,6 +8,7 @@ import { FigureWorking } from '@/components/rounds/figure-working';
 import { SignalAdvice } from '@/components/laboratory/signal-advice';
 import { Caution } from '@/components/ui/caution';
 import { DataTable } from '@/components/ui/data-table';
+import { Symbols } from '@/components/ui/symbols';
 import { Working } from '@/components/ui/working';
 import { participantWorking } from '@/lib/stats';
 import { getOwnEntry, type OwnEntry } from '@/lib/services/own-scores';
@@ -121,7 +122,9 @@ function Notes({ entry: { evaluation } }: { entry: OwnEntry }) {
       <h2 className="text-lg">Notes on this evaluation</h2>
       <ul className="mt-1 list-disc pl-5">
         {evaluation.notes.map((note) => (
-          <li key={note}>{note}</li>
+          <li key={note}>
+            <Symbols>{note}</Symbols>
+          </li>
         ))}
       </ul>
     </section>
