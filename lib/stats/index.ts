@@ -1,5 +1,6 @@
 export * from './consensus';
 export * from './display';
+export * from './distributions';
 export * from './evaluation';
 export * from './location-scale';
 export * from './scores';
