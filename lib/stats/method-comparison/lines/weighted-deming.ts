@@ -44,7 +44,7 @@ interface State extends SlopeAndIntercept {
  * Numerics: iterated until the slope stands still (1e-15), O(n) each; the jackknife repeats this n times, O(n^2).
  * Source: Linnet 1990, Stat Med 9, 1463-1473; 1993, Clin Chem 39, 424-432.
  * Checked by: tests/reference/method-comparison (milkfat), tests/stats/method-comparison/deming.test.ts.
- * @example weightedDeming([1, 2, 4, 8], [1.1, 2.1, 4.3, 8.2]) // => slope 1.0309, intercept 0.0626
+ * @example weightedDeming([1, 2, 4, 8], [1.1, 2.1, 4.3, 8.2]) // => slope 1.0314, intercept 0.0659
  */
 export function weightedDeming(
   x: readonly number[],

@@ -71,7 +71,7 @@ export interface YorkFit {
  * Numerics: iterated until the slope stands still (1e-15), O(n) each, 5 to 50 iterations.
  * Source: York, Evensen, Lopez Martinez and De Basabe Delgado 2004, Am J Phys 72, 367-375, section III.
  * Checked by: tests/reference/method-comparison (pearson_york), tests/stats/method-comparison/york.test.ts.
- * @example york({ x: [1, 2, 3], y: [1, 2.1, 2.9], uncertaintyX: [1, 1, 1], uncertaintyY: [1, 1, 1] }) // => slope 0.95043
+ * @example york({ x: [1, 2, 3], y: [1, 2.1, 2.9], uncertaintyX: [1, 1, 1], uncertaintyY: [1, 1, 1] }) // => slope 0.95375
  */
 export function york(input: YorkInput, options: YorkOptions = {}): YorkFit {
   const data = checkInput(input);

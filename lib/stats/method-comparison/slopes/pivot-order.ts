@@ -6,7 +6,7 @@ import type { OrderedPoints } from './point-grid';
 export interface Pivot {
   readonly rise: number;
   readonly run: number;
-  /** Ordered points whose slope this is; null for a slope of small whole numbers, which is exact as it stands. */
+  /** Ordered points whose slope this is; null when rise and run are exact as they stand. */
   readonly pair: readonly [number, number] | null;
   /** True for the negative of the slope of the pair. */
   readonly mirrored: boolean;
@@ -134,13 +134,21 @@ function exactSign(points: OrderedPoints, pivot: Pivot): (a: number, b: number) 
       return 0;
     if (whole === null) {
       whole = wholeUnits(points);
-      run = pair === null ? BigInt(pivot.run) : whole.x(pair[1]) - whole.x(pair[0]);
-      rise = pair === null ? BigInt(pivot.rise) : whole.y(pair[1]) - whole.y(pair[0]);
+      if (pair === null) [rise, run] = wholeRatio(pivot);
+      else {
+        run = whole.x(pair[1]) - whole.x(pair[0]);
+        rise = whole.y(pair[1]) - whole.y(pair[0]);
+      }
       if (mirrored) rise = -rise;
     }
     const gap = (whole.y(b) - whole.y(a)) * run - (whole.x(b) - whole.x(a)) * rise;
     return gap > 0n ? 1 : gap < 0n ? -1 : 0;
   };
+}
+
+function wholeRatio({ rise, run }: Pivot): [bigint, bigint] {
+  const place = Math.min(lastPlace(run), rise === 0 ? Infinity : lastPlace(rise));
+  return [rise === 0 ? 0n : toWholeUnits(rise, place), toWholeUnits(run, place)];
 }
 
 interface WholeUnits {

@@ -47,6 +47,11 @@ export class SlopeRanks {
     return made;
   }
 
+  /** The bracket at a slope, not kept. */
+  measure(pivot: Pivot): Bracket {
+    return bracketAt(this.points, pivot, this.ends[0]);
+  }
+
   /** Brackets of the two ends, below and above every slope. */
   get ends(): readonly [Bracket, Bracket] {
     return [this.brackets[0] as Bracket, this.brackets[this.brackets.length - 1] as Bracket];
