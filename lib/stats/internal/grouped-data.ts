@@ -36,7 +36,10 @@ interface Minimum {
 export function checkGroups(caller: string, groups: Groups, minimum: Minimum, what: string): void {
   if (groups.length < minimum.groups) {
     const found = `found ${groups.length}`;
-    throw new StatsError('too-few-values', `${caller} requires at least ${minimum.groups} ${what}s, ${found}`);
+    throw new StatsError(
+      'too-few-values',
+      `${caller} requires at least ${minimum.groups} ${what}s, ${found}`,
+    );
   }
   groups.forEach((group, i) => checkValues(`${caller}, ${what} ${i + 1},`, group, minimum.each));
 }

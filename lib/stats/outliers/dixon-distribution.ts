@@ -51,7 +51,8 @@ function pointsOf(n: number, far: 1 | 2 | 3): readonly Point[] {
   for (let i = 0; i < POINTS; i += 1) {
     const v = V_MIDDLE + HALF * (nodes[i] as number);
     const belowV = normalCdf(v);
-    const outer = n * (n - 1) * below * normalDensity(v) * belowV ** (far - 1) * (weights[i] as number) * HALF;
+    const outer =
+      n * (n - 1) * below * normalDensity(v) * belowV ** (far - 1) * (weights[i] as number) * HALF;
     for (let k = 0; k < POINTS; k += 1) {
       const w = HALF * ((nodes[k] as number) + 1);
       const weight = outer * normalDensity(v + w) * (weights[k] as number) * HALF;

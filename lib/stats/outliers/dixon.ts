@@ -64,7 +64,9 @@ function placesOf(n: number, { near, far }: DixonRatio, end: 'highest' | 'lowest
 }
 
 function ratioAt(sorted: Float64Array, kind: DixonRatio, end: 'highest' | 'lowest'): number {
-  const [suspect, neighbour, other] = placesOf(sorted.length, kind, end).map((place) => sorted[place] as number);
+  const [suspect, neighbour, other] = placesOf(sorted.length, kind, end).map(
+    (place) => sorted[place] as number,
+  );
   const range = Math.abs((suspect as number) - (other as number));
   return range === 0 ? 0 : Math.abs((suspect as number) - (neighbour as number)) / range;
 }
@@ -75,7 +77,11 @@ interface WorkingFacts extends DixonRatio {
   readonly ratio: DixonRatioName;
 }
 
-function workingOf(values: readonly number[], index: Int32Array, facts: WorkingFacts): readonly WorkingStep[] {
+function workingOf(
+  values: readonly number[],
+  index: Int32Array,
+  facts: WorkingFacts,
+): readonly WorkingStep[] {
   const places = placesOf(values.length, facts, facts.lowest ? 'lowest' : 'highest');
   const [suspect, neighbour, other] = places.map((place) => values[index[place] as number] ?? null);
   return [

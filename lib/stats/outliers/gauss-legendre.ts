@@ -12,7 +12,8 @@ export function gaussLegendre(n: number): GaussLegendre {
     let slope = 1;
     for (let step = 0; step < 20; step += 1) {
       let [before, value] = [1, x];
-      for (let k = 2; k <= n; k += 1) [before, value] = [value, ((2 * k - 1) * x * value - (k - 1) * before) / k];
+      for (let k = 2; k <= n; k += 1)
+        [before, value] = [value, ((2 * k - 1) * x * value - (k - 1) * before) / k];
       slope = (n * (x * value - before)) / (x * x - 1);
       x -= value / slope;
       if (Math.abs(value / slope) < 1e-15) break;

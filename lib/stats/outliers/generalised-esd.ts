@@ -74,9 +74,15 @@ export function generalisedEsd(
     kept = kept.filter(({ index }) => index !== found.index);
   }
   if (steps.length === 0) {
-    throw new StatsError('no-spread', `generalisedEsd requires values that differ, found ${values[0]} throughout`);
+    throw new StatsError(
+      'no-spread',
+      `generalisedEsd requires values that differ, found ${values[0]} throughout`,
+    );
   }
-  const outliers = steps.reduce((last, { statistic, critical }, i) => (statistic > critical ? i + 1 : last), 0);
+  const outliers = steps.reduce(
+    (last, { statistic, critical }, i) => (statistic > critical ? i + 1 : last),
+    0,
+  );
   const suspects = steps.slice(0, outliers).map(({ index }) => index);
   return { steps, outliers, suspects, working: options.working ? workingOf(values, steps) : null };
 }
@@ -113,7 +119,10 @@ export function esdCritical({ count, step, alpha }: EsdCriticalInput): number {
   checkCount('esdCritical', 'steps', step, 1);
   checkAlpha('esdCritical', alpha);
   if (step > count - 2) {
-    throw new StatsError('out-of-domain', `esdCritical has ${count - 2} steps for ${count} values, found ${step}`);
+    throw new StatsError(
+      'out-of-domain',
+      `esdCritical has ${count - 2} steps for ${count} values, found ${step}`,
+    );
   }
   const left = count - step;
   const t = studentTUpperQuantile(alpha / (2 * (left + 1)), left - 1);

@@ -30,5 +30,5 @@ export function grubbsCritical({ count: n, alpha, sides }: GrubbsCriticalInput):
   if (share >= 0.5) return 0;
   const t = studentTUpperQuantile(share, n - 2);
   // sqrt(t^2 / (df + t^2)) without overflow for a huge t.
-  return ((n - 1) / Math.sqrt(n)) / Math.sqrt(1 + (n - 2) / t / t);
+  return (n - 1) / Math.sqrt(n) / Math.sqrt(1 + (n - 2) / t / t);
 }

@@ -13,3 +13,4 @@ export * from './mandel';
 export * from './mandel-critical';
 export * from './outlier-screen';
 export type { CriticalPair, OutlierVerdict } from './verdict';
+export * from './tietjen-moore';

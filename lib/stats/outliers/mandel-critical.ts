@@ -29,7 +29,11 @@ export interface MandelCritical {
  * Checked by: tests/stats/outliers/critical-values.test.ts, tests/reference/interlaboratory.
  * @example mandelCritical({ laboratories: 8, replicates: 3, alpha: 0.05 }) // => h 1.74908, k 1.66892
  */
-export function mandelCritical({ laboratories: p, replicates: n, alpha }: MandelCriticalInput): MandelCritical {
+export function mandelCritical({
+  laboratories: p,
+  replicates: n,
+  alpha,
+}: MandelCriticalInput): MandelCritical {
   checkCount('mandelCritical', 'laboratories', p, 2);
   checkCount('mandelCritical', 'replicates', n, 1);
   checkAlpha('mandelCritical', alpha);
@@ -38,7 +42,7 @@ export function mandelCritical({ laboratories: p, replicates: n, alpha }: Mandel
 
 function limitOfH(p: number, alpha: number): number {
   const t = studentTUpperQuantile(alpha / 2, p - 2);
-  return ((p - 1) / Math.sqrt(p)) / Math.sqrt(1 + (p - 2) / t / t);
+  return (p - 1) / Math.sqrt(p) / Math.sqrt(1 + (p - 2) / t / t);
 }
 
 function limitOfK(p: number, n: number, alpha: number): number {

@@ -52,7 +52,10 @@ export function mandelStatistics(groups: Groups, options: { readonly working?: b
   const centre = sumOver(data.groups, (group) => group.mean) / p;
   const spread = Math.sqrt(sumOver(data.groups, (group) => (group.mean - centre) ** 2) / (p - 1));
   if (spread === 0) {
-    throw new StatsError('no-spread', 'mandelStatistics requires laboratory means that differ, found equal ones');
+    throw new StatsError(
+      'no-spread',
+      'mandelStatistics requires laboratory means that differ, found equal ones',
+    );
   }
   const replicated = data.groups.filter(({ count }) => count > 1);
   const within = sumOver(replicated, varianceOf) / Math.max(1, replicated.length);

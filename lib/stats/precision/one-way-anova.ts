@@ -45,7 +45,10 @@ export function oneWayAnova(groups: Groups): OneWayAnovaResult {
   const data = groupedData(groups);
   const withinDegrees = data.count - groups.length;
   if (withinDegrees === 0) {
-    throw new StatsError('too-few-values', 'oneWayAnova requires one group with at least 2 results, found none');
+    throw new StatsError(
+      'too-few-values',
+      'oneWayAnova requires one group with at least 2 results, found none',
+    );
   }
   const betweenDegrees = groups.length - 1;
   const [between, within] = [squaresBetween(data), sumOver(data.groups, (group) => group.squares)];

@@ -71,7 +71,13 @@ export function precisionAgainstLevel(levels: readonly LevelPrecision[]): Precis
   const linear = fit('linear', levels, () => weightedLine(levels));
   const logLog =
     positive && levels.every(({ sd }) => sd > 0) ? fit('log-log', levels, () => logLine(levels)) : null;
-  return { constant, proportional, linear, logLog, closest: closestOf([constant, proportional, linear, logLog]) };
+  return {
+    constant,
+    proportional,
+    linear,
+    logLog,
+    closest: closestOf([constant, proportional, linear, logLog]),
+  };
 }
 
 interface Line {
@@ -91,7 +97,10 @@ function checkLevels(levels: readonly LevelPrecision[]): void {
   }
   checkPositive(caller, 'largest standard deviation', Math.max(...levels.map(({ sd }) => sd)));
   if (levels.every(({ mean }) => mean === levels[0]?.mean)) {
-    throw new StatsError('no-spread', `${caller} requires levels whose means differ, found ${levels[0]?.mean}`);
+    throw new StatsError(
+      'no-spread',
+      `${caller} requires levels whose means differ, found ${levels[0]?.mean}`,
+    );
   }
 }
 
@@ -137,7 +146,11 @@ function weightedLine(levels: readonly LevelPrecision[]): Line | null {
   // The standard starts from weights 1 / s^2; a level without spread starts from the average instead.
   let scale = y.map((value) => (value > 0 ? value : average));
   for (let iterations = 1; iterations <= MAX_ITERATIONS; iterations += 1) {
-    const line = leastSquares(x, y, scale.map((value) => 1 / value ** 2));
+    const line = leastSquares(
+      x,
+      y,
+      scale.map((value) => 1 / value ** 2),
+    );
     const next = x.map((value) => line.intercept + line.slope * value);
     if (next.some((value) => !(value > 0))) return null;
     const settled = next.every((value, i) => Math.abs(value - (scale[i] as number)) <= TOLERANCE * value);
@@ -150,7 +163,10 @@ function weightedLine(levels: readonly LevelPrecision[]): Line | null {
       };
     }
   }
-  throw new StatsError('no-convergence', `precisionAgainstLevel did not settle within ${MAX_ITERATIONS} repeats`);
+  throw new StatsError(
+    'no-convergence',
+    `precisionAgainstLevel did not settle within ${MAX_ITERATIONS} repeats`,
+  );
 }
 
 function logLine(levels: readonly LevelPrecision[]): Line {

@@ -1,3 +1,4 @@
+import { representable } from '../internal/check-values';
 import type { Groups } from '../internal/grouped-data';
 import { mean as meanOf } from '../location-scale/mean';
 import { sd } from '../location-scale/sd';
@@ -17,8 +18,15 @@ export function precisionWorking(
   const sds = groups.map((group) => (group.length > 1 ? sd(group) : 0));
   const { mean, repeatabilitySd: s_r, betweenSd: s_L, reproducibilitySd: s_R, meanReplicates } = facts;
   const p = facts.laboratories;
-  const between = counts.reduce((sum, n, i) => sum + n * ((means[i] as number) - mean) ** 2, 0) / (p - 1);
-  const step = (name: string, formula: string, clause: string, inputs: WorkingStep['inputs'], value: number) => ({
+  const squares = counts.reduce((sum, n, i) => sum + n * ((means[i] as number) - mean) ** 2, 0);
+  const between = representable('precision', squares / (p - 1));
+  const step = (
+    name: string,
+    formula: string,
+    clause: string,
+    inputs: WorkingStep['inputs'],
+    value: number,
+  ) => ({
     name,
     formula,
     clause,
@@ -63,7 +71,13 @@ export function precisionWorking(
       s_R,
     ),
     step('Repeatability limit r', `r = ${factor} * s_r`, CLAUSES.limits, { s_r }, facts.repeatabilityLimit),
-    step('Reproducibility limit R', `R = ${factor} * s_R`, CLAUSES.limits, { s_R }, facts.reproducibilityLimit),
+    step(
+      'Reproducibility limit R',
+      `R = ${factor} * s_R`,
+      CLAUSES.limits,
+      { s_R },
+      facts.reproducibilityLimit,
+    ),
   ];
   if (facts.horRat === null || unit === undefined) return steps;
   const inputs = { s_R, m: mean, mass_fraction_of_unit: unit };

@@ -77,13 +77,19 @@ export function precision(groups: Groups, options: PrecisionOptions = {}): Preci
   const factor = options.limitFactor ?? LIMIT_FACTOR;
   checkGroups('precision', groups, { groups: 2, each: 1 }, 'laboratory');
   if (!(factor > 0 && Number.isFinite(factor))) {
-    throw new StatsError('out-of-domain', `precision requires a factor of the limits above zero, found ${factor}`);
+    throw new StatsError(
+      'out-of-domain',
+      `precision requires a factor of the limits above zero, found ${factor}`,
+    );
   }
   const data = groupedData(groups);
   const laboratories = groups.length;
   const degrees = data.count - laboratories;
   if (degrees === 0) {
-    throw new StatsError('too-few-values', 'precision requires one laboratory with at least 2 results, found none');
+    throw new StatsError(
+      'too-few-values',
+      'precision requires one laboratory with at least 2 results, found none',
+    );
   }
   const within = sumOver(data.groups, (group) => group.squares) / degrees;
   const between = squaresBetween(data) / (laboratories - 1);
