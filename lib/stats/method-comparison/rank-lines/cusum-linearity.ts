@@ -1,3 +1,5 @@
+import { mergeOrder } from '../slopes/merge-order';
+
 export interface CusumLinearity {
   /** Points above, below and on the line. */
   readonly above: number;
@@ -54,22 +56,22 @@ function sideOf(y: number, rise: number, intercept: number): number {
   return Math.abs(residual) <= ROUNDING * size ? 0 : residual;
 }
 
-/** Places by x + slope y, which grows with the projection on the line. */
-function alongLine(x: readonly number[], y: readonly number[], slope: number): number[] {
+/** Places by x + slope y, which grows with the projection on the line; equal up to rounding by place in the input. */
+function alongLine(x: readonly number[], y: readonly number[], slope: number): Int32Array {
   // Divided where the product could overflow; the order is the same.
   const unit = Math.max(1, Math.abs(slope));
-  const place = (i: number) => (x[i] as number) / unit + (slope / unit) * (y[i] as number);
-  const size = (i: number) => Math.abs((x[i] as number) / unit) + Math.abs((slope / unit) * (y[i] as number));
-  const order = x.map((_, i) => i).sort((a, b) => place(a) - place(b) || a - b);
-  // Projections that differ by rounding alone count as equal.
+  const keys = Float64Array.from(x, (value, i) => value / unit + (slope / unit) * (y[i] as number));
+  const slack = (i: number) =>
+    ROUNDING * (Math.abs((x[i] as number) / unit) + Math.abs((slope / unit) * (y[i] as number)));
+  const { order } = mergeOrder(keys);
   for (let start = 0; start < order.length;) {
     let end = start + 1;
     while (end < order.length) {
       const [a, b] = [order[end - 1] as number, order[end] as number];
-      if (place(b) - place(a) > ROUNDING * (size(a) + size(b))) break;
+      if ((keys[b] as number) - (keys[a] as number) > slack(a) + slack(b)) break;
       end += 1;
     }
-    if (end - start > 1) order.splice(start, end - start, ...order.slice(start, end).sort((a, b) => a - b));
+    if (end - start > 1) order.subarray(start, end).sort();
     start = end;
   }
   return order;

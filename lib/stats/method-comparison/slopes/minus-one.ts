@@ -10,7 +10,7 @@ export interface MinusOneCount {
 
 /** Counts the pairs below and at slope -1: O(n log n). */
 export function countAtMinusOne(ranks: SlopeRanks): MinusOneCount {
-  if (ranks.points.decimal) {
+  if (ranks.points.decimal || allSumsApart(ranks.points)) {
     const { below, equal } = ranks.at({ rise: -1, run: 1, pair: null, mirrored: false });
     return { below, equal };
   }
@@ -21,6 +21,19 @@ export function countAtMinusOne(ranks: SlopeRanks): MinusOneCount {
 
 /** Means of replicates and the like are decimals but for their last place; each value may be off by 2 of those. */
 const ROUNDING = 2 ** -51;
+
+/** True when no two sums x + y are so close that rounding could matter: then exact counts need no allowance. */
+function allSumsApart({ count, x, y }: OrderedPoints): boolean {
+  const sums = Float64Array.from({ length: count }, (_, i) => (x[i] as number) + (y[i] as number)).sort();
+  let size = 0;
+  for (let i = 0; i < count; i += 1) {
+    size = Math.max(size, Math.abs(x[i] as number) + Math.abs(y[i] as number));
+  }
+  for (let i = 1; i < count; i += 1) {
+    if ((sums[i] as number) - (sums[i - 1] as number) <= 2 * ROUNDING * size) return false;
+  }
+  return true;
+}
 
 /** Pairs with different x where sign (x + y) falls by more than rounding from the point of less x to the other. */
 function countFalling({ count, x, y }: OrderedPoints, sign: number): number {
