@@ -5,6 +5,7 @@ export * from './bland-altman';
 export * from './concordance';
 export * from './equivalence';
 export * from './kendall';
+export * from './outlying-pairs';
 export * from './paired-t';
 export type { DifferenceKind } from './pair-differences';
 export { pearson, type Correlation } from './pearson';
