@@ -35,7 +35,8 @@ export interface CensoredLikelihoodResult {
  * @param input.lessThan, input.greaterThan - limits, each of one result. Unit: unit of the data. Domain: finite.
  * @returns { location, scale, locationStandardError, scaleStandardError, logLikelihood, numeric, censoredLow, censoredHigh,
  *   iterations, statement }
- * @throws StatsError too-few-values below 2; not-finite; no-spread when the numeric results are all equal; no-convergence
+ * @throws StatsError too-few-values below 2; not-finite; no-spread when the numeric results are all equal;
+ *   out-of-domain for a limit 1e100 times their range away; no-convergence
  *
  * Ties and equal values: allowed. Order of input: does not matter but for the last digits. Without censored results:
  *   mean and standard deviation with divisor n.
@@ -53,7 +54,7 @@ export function censoredLikelihood(input: CensoredLikelihoodInput): CensoredLike
   const { centre, unit } = unitOf(values);
   const inUnits = (x: number) => {
     const z = (x - centre) / unit;
-    if (!Number.isFinite(z)) {
+    if (!(Math.abs(z) <= FARTHEST)) {
       throw new StatsError(
         'out-of-domain',
         'censoredLikelihood requires limits within the number range of the results',
@@ -84,6 +85,9 @@ export function censoredLikelihood(input: CensoredLikelihoodInput): CensoredLike
         : `Maximum likelihood for normal results, with ${censored} censored of ${values.length + censored}; not robust.`,
   };
 }
+
+/** A limit that many half ranges of the numeric results away is a mistake of units at best. */
+const FARTHEST = 1e100;
 
 /** The middle and half the range of the numeric results: a unit in which all figures are near 1. */
 function unitOf(values: readonly number[]): { centre: number; unit: number } {

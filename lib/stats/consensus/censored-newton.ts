@@ -35,7 +35,12 @@ interface Slope {
 }
 
 const HALF_LOG_TWO_PI = 0.9189385332046727;
-const MOST_STEPS = 200;
+const MOST_STEPS = 1000;
+/** Twice the gain of likelihood that a step promised; its root is how far it went in standard errors. */
+const SETTLED = 1e-22;
+const NEAR = 1e-8;
+/** So far out Mills' ratio is its first two terms to the last digit. */
+const FAR = -1e5;
 
 export function climb(data: CensoredData): Found {
   let at: Point = { a: 0, h: 1 };
@@ -43,23 +48,22 @@ export function climb(data: CensoredData): Found {
   for (let step = 1; step <= MOST_STEPS; step += 1) {
     const { a: da, h: dh } = newtonStep(slope);
     const decrement = slope.a * da + slope.h * dh;
+    if (!Number.isFinite(decrement)) break;
     let share = 1;
     let next = at;
     let nextSlope = slope;
-    for (;;) {
+    while (share > 0) {
       next = { a: at.a + share * da, h: at.h + share * dh };
       if (next.h > 0) {
         nextSlope = slopeAt(data, next);
-        if (nextSlope.value >= slope.value + 0.1 * share * decrement) break;
+        // So near the top the heights differ by rounding alone, and the full step is good.
+        if (decrement < NEAR || nextSlope.value >= slope.value + 0.1 * share * decrement) break;
       }
       share /= 2;
-      // Rounding hides any further gain: this is the top.
-      if (share < 1e-10) return resultAt(at, slope, step);
     }
     at = next;
     slope = nextSlope;
-    if (Math.abs(da) <= 1e-15 * (1 + Math.abs(at.a)) && Math.abs(dh) <= 1e-15 * at.h)
-      return resultAt(at, slope, step);
+    if (decrement <= SETTLED) return resultAt(at, slope, step);
   }
   throw new StatsError('no-convergence', `censoredLikelihood did not settle within ${MOST_STEPS} steps`);
 }
@@ -89,6 +93,7 @@ function slopeAt({ values, left, right }: CensoredData, { a, h }: Point): Slope 
   const addTail = (x: number, side: 1 | -1) => {
     const u = side * (h * x - a);
     const log = normalLogCdf(u);
+    if (u < FAR) return add(x, log, side * (u + 1 / u), 1);
     const ratio = Math.exp(-(u * u) / 2 - HALF_LOG_TWO_PI - log);
     add(x, log, -side * ratio, Math.max(0, ratio * (u + ratio)));
   };

@@ -26,7 +26,7 @@ export interface Fences extends Hinges {
  * Ties and equal values: allowed; a value on a fence is inside it. Order of input: does not matter.
  * Numerics: one sort, O(n log n).
  * Source: Tukey 1977, Exploratory Data Analysis, 2; ASTM E2489 uses them for one sample.
- * Checked by: tests/stats/location-scale/hinges.test.ts, tests/reference/proficiency (estimators).
+ * Checked by: tests/stats/location-scale/trimmed-mean.test.ts, tests/reference/proficiency (estimators).
  * @example fences([1, 2, 3, 4, 100]).extreme // => 1
  */
 export function fences(values: readonly number[]): Fences {

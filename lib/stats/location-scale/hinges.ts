@@ -17,7 +17,7 @@ export interface Hinges {
  *
  * Ties and equal values: allowed. Order of input: does not matter. Numerics: one sort, O(n log n).
  * Source: Tukey 1977, Exploratory Data Analysis, 2.
- * Checked by: tests/stats/location-scale/hinges.test.ts, tests/reference/proficiency (estimators).
+ * Checked by: tests/stats/location-scale/trimmed-mean.test.ts, tests/reference/proficiency (estimators).
  * @example hinges([1, 2, 3, 4, 100]) // => { lower: 2, upper: 4 }
  */
 export function hinges(values: readonly number[]): Hinges {

@@ -113,7 +113,7 @@ function scaleOf(
 
 /** sqrt(a^2 - b^2) without overflow. */
 function rootOfDifference(a: number, b: number): number {
-  return a > b ? Math.sqrt(a - b) * Math.sqrt(a + b) : 0;
+  return a > b ? a * Math.sqrt(((a - b) / a) * ((a + b) / a)) : 0;
 }
 
 function betweenSteps(sR: number, sr: number | undefined): WorkingStep[] {

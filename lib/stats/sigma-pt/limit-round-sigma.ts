@@ -33,7 +33,7 @@ export interface LimitRoundSigmaResult {
  * @throws StatsError not-finite; no-spread when one is 0; out-of-domain when one is negative or the limits are crossed
  *
  * Numerics: plain comparison. Source: ISO 13528:2022, 8.6 (limits on the robust standard deviation of a round).
- * Checked by: tests/stats/sigma-pt/limit-round-sigma.test.ts.
+ * Checked by: tests/stats/sigma-pt/sigma-function.test.ts.
  * @example limitRoundSigma({ roundSd: 3, highest: 2 }).sigmaPt // => 2
  */
 export function limitRoundSigma(input: LimitRoundSigmaInput): LimitRoundSigmaResult {

@@ -34,7 +34,7 @@ export interface PooledSigmaResult {
  *
  * Order of input: does not matter but for the last digit. Numerics: scaled by the largest, no overflow, O(n).
  * Source: ISO 13528:2022, 8.3 (experience from earlier rounds); pooling as in ISO 5725-2, 7.4.
- * Checked by: tests/stats/sigma-pt/pooled-sigma.test.ts.
+ * Checked by: tests/stats/sigma-pt/sigma-function.test.ts.
  * @example pooledSigma([{ standardDeviation: 3, count: 11 }, { standardDeviation: 4, count: 11 }]).standardDeviation // => 3.53553
  */
 export function pooledSigma(rounds: readonly RoundSpread[]): PooledSigmaResult {

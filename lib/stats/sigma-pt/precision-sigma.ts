@@ -26,9 +26,9 @@ export interface PrecisionSigmaResult {
  * @throws StatsError not-finite; no-spread when sigma_R, or the result, is 0; out-of-domain when one is negative, sigma_r is
  *   above sigma_R or m is not a whole number
  *
- * Numerics: as sqrt((sigma_R - q) (sigma_R + q)), q = sigma_r sqrt(1 - 1/m): no overflow, no cancelled digits.
+ * Numerics: from (sigma_R - q) (sigma_R + q) with q = sigma_r sqrt(1 - 1/m): no overflow, no cancelled digits.
  * Source: ISO 13528:2022, 8.5.
- * Checked by: tests/stats/sigma-pt/precision-sigma.test.ts.
+ * Checked by: tests/stats/sigma-pt/sigma-function.test.ts.
  * @example precisionSigma({ reproducibilitySd: 5, repeatabilitySd: 4, replicates: 2 }).sigmaPt // => 4.12311
  */
 export function precisionSigma(input: PrecisionSigmaInput): PrecisionSigmaResult {
@@ -46,7 +46,15 @@ export function precisionSigma(input: PrecisionSigmaInput): PrecisionSigmaResult
     );
   }
   const q = repeatabilitySd * Math.sqrt(1 - 1 / replicates);
-  const sigmaPt = Math.sqrt(reproducibilitySd - q) * Math.sqrt(reproducibilitySd + q);
+  const sigmaPt =
+    reproducibilitySd *
+    Math.sqrt(((reproducibilitySd - q) / reproducibilitySd) * ((reproducibilitySd + q) / reproducibilitySd));
+  if (sigmaPt === 0) {
+    throw new StatsError(
+      'no-spread',
+      'precisionSigma leaves no spread between laboratories, found a sigma_pt of 0',
+    );
+  }
   const step: WorkingStep = {
     name: 'Standard deviation for proficiency assessment from precision data',
     formula: 'sigma_pt = sqrt(sigma_R^2 - sigma_r^2 * (1 - 1 / m))',

@@ -185,6 +185,8 @@ describe('known values', () => {
   it('the log of a normal tail goes where the tail itself is 0', () => {
     expect(normalCdf(-40)).toBeGreaterThan(0 - 1e-300);
     expectClose(normalLogCdf(-40), -804.6084420137538, { rtol: 1e-13 });
+    expectClose(normalLogCdf(-1e100), -5e199, { rtol: 1e-14 });
+    expect(normalLogCdf(-1e200)).toBe(-Infinity);
     expect(normalLogCdf(Infinity)).toBe(0);
     expect(normalLogCdf(-Infinity)).toBe(-Infinity);
   });
