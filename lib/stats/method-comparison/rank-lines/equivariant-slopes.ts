@@ -1,6 +1,7 @@
 import { StatsError } from '../../stats-error';
 import { selectAbsoluteSlope } from '../slopes/absolute-slope-ranks';
 import type { SlopeRanks } from '../slopes/slope-ranks';
+import { midpoint } from './midpoint';
 import type { SlopeSearch } from './passing-bablok';
 import { countsOf, limitsOf, shiftedRank } from './shifted-slopes';
 
@@ -11,7 +12,7 @@ const ROUNDING = 2 ** -50;
 export function equivariantSlopes(ranks: SlopeRanks, spread: number): SlopeSearch {
   const all = ranks.total + ranks.points.verticalPairs;
   const size = (rank: number) => (rank <= ranks.total ? selectAbsoluteSlope(ranks, rank - 1) : Infinity);
-  const median = all % 2 === 1 ? size((all + 1) / 2) : (size(all / 2) + size(all / 2 + 1)) / 2;
+  const median = all % 2 === 1 ? size((all + 1) / 2) : midpoint(size(all / 2), size(all / 2 + 1));
   if (ranks.total === 0 || !Number.isFinite(median)) {
     throw new StatsError('no-spread', 'passingBablok finds a vertical line: most pairs have the same x');
   }

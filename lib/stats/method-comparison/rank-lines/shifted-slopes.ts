@@ -1,8 +1,10 @@
+import { representable } from '../../internal/check-values';
 import { StatsError } from '../../stats-error';
 import { countAtMinusOne, type MinusOneCount } from '../slopes/minus-one';
 import type { OrderedPoints } from '../slopes/point-grid';
 import type { SlopeRanks } from '../slopes/slope-ranks';
 import type { Interval } from '../types';
+import { midpoint } from './midpoint';
 import type { SlopeSearch } from './passing-bablok';
 
 /** Median of the slopes of all pairs, shifted by the slopes below -1. */
@@ -16,9 +18,12 @@ export function shiftedSlopes(ranks: SlopeRanks, spread: number): SlopeSearch {
     );
   }
   const at = shiftedRank(ranks, cut);
-  const slope = total % 2 === 1 ? at((total + 1) / 2) : (at(total / 2) + at(total / 2 + 1)) / 2;
+  const slope = total % 2 === 1 ? at((total + 1) / 2) : midpoint(at(total / 2), at(total / 2 + 1));
   if (!Number.isFinite(slope)) {
-    throw new StatsError('no-spread', 'passingBablok finds a vertical line: most pairs have the same x');
+    throw new StatsError(
+      'no-spread',
+      'passingBablok finds no slope above -1: most pairs fall more steeply or have the same x',
+    );
   }
   return { slope, ...limitsOf(at, total, spread), ...countsOf(ranks, cut) };
 }
@@ -31,7 +36,7 @@ export function shiftedRank(ranks: SlopeRanks, cut: MinusOneCount): (rank: numbe
   return (rank) => {
     const place = cut.below + cut.equal + rank - 1;
     if (place >= ranks.total) return Infinity;
-    return ranks.select(place) + 0;
+    return representable('passingBablok', ranks.select(place));
   };
 }
 

@@ -9,6 +9,7 @@ import { step } from '../internal/step';
 import { orderPoints } from '../slopes/point-grid';
 import { SlopeRanks } from '../slopes/slope-ranks';
 import type { ConfidenceOptions, Interval } from '../types';
+import { midpoint } from './midpoint';
 import { residualMedian } from './residual-median';
 
 export interface TheilSenOptions extends ConfidenceOptions {
@@ -75,7 +76,8 @@ export function theilSen(
   const lowerRank = Math.max(Math.round((total - spread) / 2), 1);
   const upperRank = Math.min(Math.round((total + spread) / 2) + 1, total);
   const at = (rank: number) => representable(caller, ranks.select(rank - 1));
-  const slope = (at((total + 1) >> 1) + at((total >> 1) + 1)) / 2;
+  // Halves by division: there can be more pairs than a shift of 32 bits can hold.
+  const slope = midpoint(at(Math.floor((total + 1) / 2)), at(Math.floor(total / 2) + 1));
   const slopeInterval = { lower: at(lowerRank), upper: at(upperRank) };
   const intercept = representable(
     caller,
