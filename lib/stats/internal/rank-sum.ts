@@ -30,15 +30,14 @@ export function rankSum(first: readonly number[], second: readonly number[]): Ra
 /** Counts of the arrangements with each U, as the coefficients of a Gaussian binomial (kept as shares of all). */
 function exactPValue(statistic: number, m: number, n: number): number {
   const largest = m * n;
-  let shares = new Float64Array(largest + 1);
-  shares[0] = 1;
-  // The recursion P(u; m, n) over n, for each m in turn, in probabilities so that no count overflows.
+  // The recursion over both sizes, in probabilities so that no count overflows.
   const table: Float64Array[] = Array.from({ length: n + 1 }, () => Float64Array.of(1));
   for (let i = 1; i <= m; i += 1) {
-    for (let j = 1; j <= n; j += 1)
+    for (let j = 1; j <= n; j += 1) {
       table[j] = merged(table[j] as Float64Array, table[j - 1] as Float64Array, i, j);
+    }
   }
-  shares = table[n] as Float64Array;
+  const shares = table[n] as Float64Array;
   const low = Math.min(statistic, largest - statistic);
   let sum = 0;
   for (let u = 0; u <= low; u += 1) sum += shares[u] as number;

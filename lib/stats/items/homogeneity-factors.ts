@@ -22,7 +22,7 @@ export interface HomogeneityFactors {
  * Numerics: F1 = chi2_{0.95, g-1} / (g - 1); F2 = (F_{0.95, g-1, g(m-1)} - 1) / m, which for duplicates is the
  *   published (F_{0.95, g-1, g} - 1) / 2. For more replicates by the same derivation, not printed in the standard.
  * Source: Fearn and Thompson 2001, Analyst 126, 1414; IUPAC 2006, Appendix 1; ISO 13528:2022, Annex B.
- * Checked by: tests/stats/items/homogeneity.test.ts, tests/reference/interlaboratory (table for 7 to 20 items).
+ * Checked by: tests/stats/items/items.test.ts, tests/reference/interlaboratory (table for 7 to 20 items).
  * @example homogeneityFactors({ items: 10 }) // => f1 1.87989, f2 1.01019
  */
 export function homogeneityFactors({

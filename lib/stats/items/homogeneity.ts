@@ -9,6 +9,7 @@ import {
   sumOver,
   type Groups,
 } from '../internal/grouped-data';
+import { midranks } from '../internal/ranks';
 import { simpleTrend, type SimpleTrend } from '../internal/simple-trend';
 import { mean } from '../location-scale/mean';
 import { cochranTest, type CochranResult } from '../outliers/cochran';
@@ -93,7 +94,7 @@ const SLACK = 1 + 16 * Number.EPSILON;
  * Ties and equal values: allowed. Zero spread: s_w = s_s = 0, homogeneous. Order of input: only as filling order.
  * Numerics: s_s^2 = s_x^2 - s_w^2 / m; sums as oneWayAnova. O(N log N).
  * Source: ISO 13528:2022, Annex B; Thompson, Ellison, Wood 2006, Pure Appl. Chem. 78, 145, Appendix 1.
- * Checked by: tests/stats/items/homogeneity.test.ts, tests/reference/interlaboratory (copper in soya, StRD).
+ * Checked by: tests/stats/items/items.test.ts, tests/reference/interlaboratory (copper in soya, StRD).
  * @example homogeneity({ items: [[10.1, 10.2], [9.8, 9.9], [10.0, 10.1]], sigmaPt: 1 })
  *   // => withinSd 0.070711, betweenSd 0.14434, verdict 'homogeneous'
  */
@@ -183,9 +184,12 @@ function measurementFacts({ items, measurementOrder: order }: HomogeneityInput) 
   }
   const places = order.flat();
   checkOrder('measurement', places, places.length);
+  // All replicates of an item lie together when their ranks span no more than their number.
+  const { ranks } = midranks(places);
+  let start = 0;
   const replicatesTogether = order.every((runs) => {
-    const [first, last] = [Math.min(...runs), Math.max(...runs)];
-    return places.filter((place) => place >= first && place <= last).length === runs.length;
+    const own = ranks.subarray(start, (start += runs.length));
+    return Math.max(...own) - Math.min(...own) < runs.length;
   });
   return { measurementTrend: simpleTrend('homogeneity', places, items.flat()), replicatesTogether };
 }

@@ -1,4 +1,5 @@
 import { checkPositive, checkValues, representable } from '../internal/check-values';
+import { sortedCopy } from '../internal/sorted';
 import { simpleTrend, type SimpleTrend } from '../internal/simple-trend';
 import { StatsError } from '../stats-error';
 import type { WorkingStep } from '../working';
@@ -50,9 +51,9 @@ export interface StabilityTrendResult {
  *   sigma_pt is 0; out-of-domain
  *
  * Ties and equal values: allowed; results exactly on a line give no test, and any slope counts. Zero spread: slope 0,
- *   shown stable. Order of input: does not matter. Numerics: O(n).
+ *   shown stable. Order of input: does not matter. Numerics: O(n log n).
  * Source: ISO Guide 35:2017, 8; ISO 13528:2022, Annex B.5.
- * Checked by: tests/stats/items/stability.test.ts (R lm).
+ * Checked by: tests/stats/items/items.test.ts (R lm).
  * @example stabilityTrend({ times: [0, 1, 2, 3], values: [10, 9.9, 10.1, 10], sigmaPt: 1 })
  *   // => trend.slope 0.02, significant false
  */
@@ -68,7 +69,8 @@ export function stabilityTrend(
   }
   checkValues('stabilityTrend', times, 3);
   checkPositive('stabilityTrend', 'sigma_pt', sigmaPt);
-  const [first, last] = [Math.min(...times), Math.max(...times)];
+  const ordered = sortedCopy(times);
+  const [first, last] = [ordered[0] as number, ordered[ordered.length - 1] as number];
   if (first === last) {
     throw new StatsError('no-spread', `stabilityTrend requires times that differ, found ${first} throughout`);
   }

@@ -43,7 +43,7 @@ export interface StabilityResult {
  * Numerics: the comparison with 0.3 is made on the decimal figures, so that 10.3 and 10.0 against 1 is at the limit.
  *   addedUncertainty takes a change as rectangular between both figures (common practice).
  * Source: ISO 13528:2022, Annex B.5.
- * Checked by: tests/stats/items/stability.test.ts.
+ * Checked by: tests/stats/items/items.test.ts.
  * @example stability({ before: 10, after: 9.6, sigmaPt: 1 }) // => difference -0.4, verdict 'not-stable'
  */
 export function stability(

@@ -39,7 +39,7 @@ export interface CochranResult {
  * Ties and equal values: of equal variances the first. Order of input: does not matter but for ties.
  * Numerics: O(N log N).
  * Source: ISO 5725-2:2019, 7.3.3; Cochran 1941, Annals of Eugenics 11, 47.
- * Checked by: tests/stats/outliers/cochran.test.ts, tests/reference/interlaboratory.
+ * Checked by: tests/stats/outliers/outlier-tests.test.ts, tests/reference/interlaboratory.
  * @example cochranTest([[1, 1.2], [2, 2.1], [3, 4]]) // => statistic 0.95238, suspect 2
  */
 export function cochranTest(groups: Groups, options: { readonly working?: boolean } = {}): CochranResult {
@@ -54,7 +54,7 @@ export function cochranTest(groups: Groups, options: { readonly working?: boolea
     );
   }
   const sum = variances.reduce((total, variance) => total + variance, 0);
-  const largest = Math.max(...variances);
+  const largest = variances.reduce((most, variance) => Math.max(most, variance), 0);
   if (sum === 0) throw new StatsError('no-spread', 'cochranTest requires replicates that differ, found none');
   const replicates = mostFrequent(counted.map(({ count }) => count));
   const statistic = largest / sum;

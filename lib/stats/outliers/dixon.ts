@@ -30,7 +30,7 @@ export interface DixonResult extends OutlierTestResult {
  * Ties and equal values: allowed; where the ratio's own range is 0 (all but the far values equal) it counts as 0.
  * Order of input: does not matter but for ties. Numerics: O(n log n) and tens of milliseconds for the distribution.
  * Source: Dixon 1951, Annals of Mathematical Statistics 22, 68; Dixon 1953, Biometrics 9, 74.
- * Checked by: tests/stats/outliers/dixon.test.ts.
+ * Checked by: tests/stats/outliers/outlier-tests.test.ts.
  * @example dixonTest([10.1, 10.2, 10.3, 10.2, 12]) // => statistic 0.89474, ratio 'r10', suspects [4]
  */
 export function dixonTest(values: readonly number[], options: DixonOptions = {}): DixonResult {

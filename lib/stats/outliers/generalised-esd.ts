@@ -46,7 +46,7 @@ export interface GeneralisedEsdResult {
  *   steps end. Order of input: does not matter but for ties.
  * Numerics: mean and sd computed anew at every step, O(n r).
  * Source: Rosner 1983, Technometrics 25, 165; NIST/SEMATECH e-Handbook 1.3.5.17.3.
- * Checked by: tests/stats/outliers/generalised-esd.test.ts.
+ * Checked by: tests/stats/outliers/outlier-tests.test.ts.
  * @example generalisedEsd([1, 2, 3, 4, 5, 6, 7, 8, 9, 40], { maxOutliers: 2 }) // => outliers 1, suspects [9]
  */
 export function generalisedEsd(

@@ -39,7 +39,7 @@ export interface OutlierTestResult {
  * Ties and equal values: of equal extremes the one listed first; of equal distances the highest. Zero spread: an error.
  * Order of input: does not matter but for ties. Numerics: O(n log n).
  * Source: ISO 5725-2:2019, 7.3.4; Grubbs 1969, Technometrics 11, 1.
- * Checked by: tests/stats/outliers/grubbs.test.ts, tests/reference/interlaboratory (uranium, creosote, coal).
+ * Checked by: tests/stats/outliers/outlier-tests.test.ts, tests/reference/interlaboratory (uranium, creosote, coal).
  * @example grubbsOne([199.31, 199.53, 200.19, 200.82, 201.92, 201.95, 202.18, 245.57])
  *   // => statistic 2.46876, verdict 'outlier', suspects [7]
  */

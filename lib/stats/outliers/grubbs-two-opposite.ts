@@ -17,8 +17,8 @@ import { criticalPair, verdictAbove } from './verdict';
  * Ties and equal values: allowed. Zero spread: an error. Order of input: does not matter but for ties.
  * Numerics: O(n log n).
  * Source: David, Hartley and Pearson 1954, Biometrika 41, 482; Grubbs 1969, Technometrics 11, 1.
- * Checked by: tests/stats/outliers/grubbs.test.ts.
- * @example grubbsTwoOpposite([1, 10, 11, 12, 13, 22]) // => statistic 3.11188, suspects [0, 5]
+ * Checked by: tests/stats/outliers/outlier-tests.test.ts.
+ * @example grubbsTwoOpposite([1, 10, 11, 12, 13, 22]) // => statistic 3.12702, suspects [0, 5]
  */
 export function grubbsTwoOpposite(
   values: readonly number[],

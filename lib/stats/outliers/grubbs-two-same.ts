@@ -21,7 +21,7 @@ import { criticalPair, verdictBelow } from './verdict';
  *   ratio is 0. Order of input: does not matter but for ties.
  * Numerics: O(n log n); the null distribution is exact to about 1e-7 and costs tens of milliseconds.
  * Source: ISO 5725-2:2019, 7.3.4; Grubbs and Beck 1972, Technometrics 14, 847.
- * Checked by: tests/stats/outliers/grubbs.test.ts (simulation, tables).
+ * Checked by: tests/stats/outliers/outlier-tests.test.ts (simulation, tables).
  * @example grubbsTwoSame([10, 11, 12, 13, 14, 30, 31]) // => statistic 0.0201, verdict 'outlier', suspects [5, 6]
  */
 export function grubbsTwoSame(values: readonly number[], options: OutlierOptions = {}): OutlierTestResult {

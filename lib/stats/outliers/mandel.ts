@@ -42,7 +42,7 @@ export interface MandelResult {
  * Ties and equal values: allowed. No spread within any laboratory: k is null. Order of input: kept.
  * Numerics: means unweighted; O(N log N).
  * Source: ISO 5725-2:2019, 7.3.1; Mandel 1985, Journal of Research NBS; ASTM E691.
- * Checked by: tests/stats/outliers/mandel.test.ts, tests/reference/interlaboratory.
+ * Checked by: tests/stats/outliers/outlier-tests.test.ts, tests/reference/interlaboratory.
  * @example mandelStatistics([[1, 2], [3, 4], [8, 9]]) // => h of the third 1.10940, k 1 for all
  */
 export function mandelStatistics(groups: Groups, options: { readonly working?: boolean } = {}): MandelResult {

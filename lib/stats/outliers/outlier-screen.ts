@@ -38,7 +38,7 @@ export interface OutlierScreenResult {
  * Ties and equal values: allowed; a test without spread is left out with its reason. Order of input: kept.
  * Numerics: O(N log N) and tens of milliseconds for the pair test.
  * Source: ISO 5725-2:2019, 7.3.
- * Checked by: tests/stats/outliers/outlier-screen.test.ts.
+ * Checked by: tests/stats/outliers/outlier-tests.test.ts.
  * @example outlierScreen([[1, 1.1], [1.2, 1.1], [1, 1.2], [9, 9.1]]).flags
  *   // => [{ laboratory: 3, test: 'grubbs-one', verdict: 'outlier' }]
  */

@@ -23,8 +23,8 @@ export interface TietjenMooreResult {
  * Ties and equal values: of equal distances (to 1e-12) the value listed later is the suspect. Order of input: does not
  *   matter but for ties. Numerics: O(n log n).
  * Source: Tietjen and Moore 1972, Technometrics 14, 583; NIST/SEMATECH e-Handbook 1.3.5.17.2.
- * Checked by: tests/stats/outliers/generalised-esd.test.ts.
- * @example tietjenMoore([1, 2, 3, 4, 30], 1) // => statistic 0.00821, suspects [4]
+ * Checked by: tests/stats/outliers/outlier-tests.test.ts.
+ * @example tietjenMoore([1, 2, 3, 4, 30], 1) // => statistic 0.00820, suspects [4]
  */
 export function tietjenMoore(values: readonly number[], count: number): TietjenMooreResult {
   const sample = standardise('tietjenMoore', values, 3);

@@ -53,7 +53,7 @@ export interface CusumResult {
  *
  * Ties and equal values: allowed; a sum at h is no signal. Order of input: matters. Numerics: O(n).
  * Source: Page 1954, Biometrika 41, 100; ISO 7870-4:2021; NIST/SEMATECH e-Handbook 6.3.2.3.
- * Checked by: tests/stats/over-rounds/cusum-chart.test.ts, tests/reference/interlaboratory (allergen).
+ * Checked by: tests/stats/over-rounds/charts.test.ts, tests/reference/interlaboratory (allergen).
  * @example cusumChart([1, 1, 3, 3]).points[3].high // => 6
  */
 export function cusumChart(values: readonly number[], options: CusumOptions = {}): CusumResult {

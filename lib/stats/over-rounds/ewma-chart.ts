@@ -46,7 +46,7 @@ export interface EwmaResult {
  * Ties and equal values: allowed; on a limit is no signal. Order of input: matters. Numerics: O(n).
  * Source: target +- L sigma sqrt(lambda / (2 - lambda) (1 - (1 - lambda)^(2 i))): ISO 7870-6:2016; NIST/SEMATECH
  *   e-Handbook 6.3.2.4, which gives the final limits.
- * Checked by: tests/stats/over-rounds/ewma-chart.test.ts, tests/reference/interlaboratory (nist_ewma, allergen).
+ * Checked by: tests/stats/over-rounds/charts.test.ts, tests/reference/interlaboratory (nist_ewma, allergen).
  * @example ewmaChart([1, 1], { weight: 0.5 }).points[1].value // => 0.75
  */
 export function ewmaChart(values: readonly number[], options: EwmaOptions = {}): EwmaResult {

@@ -39,7 +39,7 @@ export interface RelationToGroupResult {
  * Ties and equal values: mean ranks with correction. Order of input: does not matter, pairs stay together. Numerics:
  *   O(n log n).
  * Source: one-way analysis of variance; Kruskal and Wallis 1952, JASA 47, 583.
- * Checked by: tests/stats/over-rounds/relations.test.ts (R aov, kruskal.test).
+ * Checked by: tests/stats/over-rounds/over-rounds.test.ts (R aov, kruskal.test).
  * @example relationToGroup([1, 1.2, -0.9, -1.1], ['A', 'A', 'B', 'B']).groups.map((g) => g.mean) // => [1.1, -1]
  */
 export function relationToGroup(z: readonly number[], labels: readonly string[]): RelationToGroupResult {

@@ -27,7 +27,7 @@ export interface RelationToNumberResult {
  *
  * Ties and equal values: mean ranks. Order of input: does not matter, pairs stay together. Numerics: O(n log n).
  * Source: least squares; Spearman 1904; t approximation as Kendall and Stuart, volume 2, 31.19.
- * Checked by: tests/stats/over-rounds/relations.test.ts (R lm, cor.test).
+ * Checked by: tests/stats/over-rounds/over-rounds.test.ts (R lm, cor.test).
  * @example relationToNumber([1, 2, 2, 4], [10, 20, 30, 40]).rankCorrelation // => 0.94868
  */
 export function relationToNumber(z: readonly number[], numbers: readonly number[]): RelationToNumberResult {

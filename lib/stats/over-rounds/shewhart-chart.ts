@@ -42,7 +42,7 @@ export interface ShewhartResult {
  * Ties and equal values: z of 0 is on no side; equal neighbours neither rise nor fall. Order of input: matters.
  * Numerics: O(n times the windows).
  * Source: ISO 13528:2022, 10.8; ISO 7870-2:2013, Annex B; Nelson 1984, Journal of Quality Technology 16, 237.
- * Checked by: tests/stats/over-rounds/shewhart-chart.test.ts, tests/reference/interlaboratory (allergen).
+ * Checked by: tests/stats/over-rounds/charts.test.ts, tests/reference/interlaboratory (allergen).
  * @example shewhartChart([0.5, 2.4, 2.1, -3.2]).findings.map(({ rule }) => rule)
  *   // => ['two-beyond-warning', 'two-of-three-beyond-two', 'beyond-action']
  */

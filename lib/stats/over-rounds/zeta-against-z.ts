@@ -76,7 +76,7 @@ export function zetaAgainstZ(
   };
   for (const name of classes) counts[name] += 1;
   const n = scores.length;
-  const largest = Math.max(...scores.map(({ zeta }) => Math.abs(zeta)), Number.MIN_VALUE);
+  const largest = scores.reduce((most, { zeta }) => Math.max(most, Math.abs(zeta)), Number.MIN_VALUE);
   const squares = scores.reduce((sum, { zeta }) => sum + (zeta / largest) ** 2, 0);
   const factor = representable('zetaAgainstZ', largest * Math.sqrt(squares / n));
   const [low, high] = [chiSquareQuantile(0.025, n), chiSquareUpperQuantile(0.025, n)];

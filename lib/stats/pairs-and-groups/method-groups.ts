@@ -85,7 +85,7 @@ const FEW = 5;
  * Numerics: O(n log n + k^2 n); rank test exact without ties up to 49 in a group. Robust interval: t with Welch's degrees
  *   of freedom on 1.25 s* / sqrt(n) of both, an approximation.
  * Source: Welch 1947, Biometrika 34, 28; Mann and Whitney 1947; Kruskal and Wallis 1952; Holm 1979.
- * Checked by: tests/stats/pairs-and-groups/method-groups.test.ts (R t.test, wilcox.test, kruskal.test, p.adjust).
+ * Checked by: tests/stats/pairs-and-groups/pairs-and-groups.test.ts (R t.test, wilcox.test, kruskal.test, p.adjust).
  * @example methodGroups([1, 2, 3, 5, 6, 7].map((value, i) => ({ value, group: i < 3 ? 'A' : 'B' }))).differences[0]
  *   // => meanDifference -4, welchPValue 0.0080
  */

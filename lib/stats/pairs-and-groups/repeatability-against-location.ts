@@ -59,7 +59,7 @@ export interface RepeatabilityAgainstLocationOptions {
  *   input: kept. Numerics: O(N log N).
  * Source: ISO 13528:2022, 10.6: ((x - x*) / s_x)^2 + 2 (n - 1) ln(s / w*)^2 against chi-square with 2 degrees of
  *   freedom; van Nuland 1992, Quality Engineering 4, 583.
- * Checked by: tests/stats/pairs-and-groups/repeatability-against-location.test.ts.
+ * Checked by: tests/stats/pairs-and-groups/pairs-and-groups.test.ts.
  * @example repeatabilityAgainstLocation([[1, 1.2], [1.1, 1.2], [1, 1.1], [5, 5.1]]).laboratories[3].outside99 // => true
  */
 export function repeatabilityAgainstLocation(

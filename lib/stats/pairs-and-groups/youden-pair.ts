@@ -84,9 +84,9 @@ export interface YoudenPairResult {
  * Numerics: O(n log n). Prediction: 2 (n - 1)(n + 1) / (n (n - 2)) F; chi-square with 2 degrees of freedom.
  * Source: Youden 1959; Mandel and Lashof 1974; ISO 13528:2022, 10.5; robust correlation: Gnanadesikan and Kettenring
  *   1972, Biometrics 28, 81, in the form that keeps it between -1 and 1 (Huber 1981, 8.2).
- * Checked by: tests/stats/pairs-and-groups/youden-pair.test.ts, tests/reference/interlaboratory (youden_*).
+ * Checked by: tests/stats/pairs-and-groups/pairs-and-groups.test.ts, tests/reference/interlaboratory (youden_*).
  * @example youdenPair([{ a: 2, b: 6.3 }, { a: 3.6, b: 6.6 }, { a: 1.8, b: 6.8 }, { a: 1.1, b: 6.8 }]).randomSd
- *   // => 0.82108
+ *   // => 0.81445
  */
 export function youdenPair(pairs: readonly YoudenPoint[], options: YoudenOptions = {}): YoudenPairResult {
   checkPairs(pairs);

@@ -37,7 +37,7 @@ export interface OneWayAnovaResult {
  * Numerics: sums about a central value in units near 1, compensated; where the results share their first five digits
  *   the differences are taken of the decimal figures, which is exact. O(N log N).
  * Source: NIST/SEMATECH e-Handbook 7.4.3; n0 as ISO 5725-2:2019, 7.4. NIST StRD sets reproduced.
- * Checked by: tests/stats/precision/one-way-anova.test.ts, tests/reference/interlaboratory (strd_*, atmwtag).
+ * Checked by: tests/stats/precision/precision.test.ts, tests/reference/interlaboratory (strd_*, atmwtag).
  * @example oneWayAnova([[1, 2], [3, 4], [8, 9]]) // => fRatio 52, residualSd 0.70711, betweenSd 3.57071
  */
 export function oneWayAnova(groups: Groups): OneWayAnovaResult {

@@ -25,7 +25,7 @@ export interface PooledSdResult {
  * Zero spread: 0. Order of input: does not matter.
  * Numerics: squares are taken relative to the largest sd. O(k).
  * Source: NIST/SEMATECH e-Handbook 2.6.1 (gauge study); JCGM 100:2008, 4.2.4.
- * Checked by: tests/stats/precision/pooled-sd.test.ts, tests/reference/interlaboratory (gauge_mpc61).
+ * Checked by: tests/stats/precision/precision.test.ts, tests/reference/interlaboratory (gauge_mpc61).
  * @example pooledSd([{ sd: 3, degreesOfFreedom: 1 }, { sd: 4, degreesOfFreedom: 1 }]) // => sd 3.53553
  */
 export function pooledSd(sds: readonly StandardDeviationInput[]): PooledSdResult {

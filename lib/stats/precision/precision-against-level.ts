@@ -51,7 +51,7 @@ const TOLERANCE = 1e-12;
  * Ties and equal values: allowed. Zero spread at one level: the log-log fit is null. Order of input: does not matter.
  * Numerics: O(q) a repeat; relative change below 1e-12, at most 200 repeats.
  * Source: ISO 5725-2:2019, 7.5 (relations I, II, III); proportional: the mean of s / m, as there.
- * Checked by: tests/stats/precision/precision-against-level.test.ts.
+ * Checked by: tests/stats/precision/precision.test.ts.
  * @example precisionAgainstLevel([{ mean: 1, sd: 0.2 }, { mean: 2, sd: 0.4 }, { mean: 4, sd: 0.8 }])
  *   // => proportional slope 0.2, logLog slope 1, closest 'proportional'
  */
@@ -111,10 +111,13 @@ function fit(
 ): FittedRelation | null {
   const line = solve();
   if (line === null) return null;
-  const fitted = levels.map(({ mean }) => valueOf(relation, line, mean));
+  const caller = 'precisionAgainstLevel';
+  representable(caller, line.intercept);
+  representable(caller, line.slope);
+  const fitted = levels.map(({ mean }) => representable(caller, valueOf(relation, line, mean)));
   if (fitted.some((value) => !(value > 0))) return null;
   const squares = levels.reduce((sum, { sd }, i) => sum + (sd / (fitted[i] as number) - 1) ** 2, 0);
-  const relativeMisfit = representable('precisionAgainstLevel', Math.sqrt(squares / levels.length));
+  const relativeMisfit = representable(caller, Math.sqrt(squares / levels.length));
   return { relation, ...line, fitted, relativeMisfit };
 }
 

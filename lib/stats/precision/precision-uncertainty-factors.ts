@@ -31,7 +31,7 @@ const Z_95 = 1.96;
  *
  * Numerics: three formulas; the coverage factor is 1.96 as printed.
  * Source: ISO 5725-1:1994, 6.3, equations 9 to 16 (numbers from memory).
- * Checked by: tests/stats/precision/precision-uncertainty-factors.test.ts, tests/reference/interlaboratory.
+ * Checked by: tests/stats/precision/precision.test.ts, tests/reference/interlaboratory.
  * @example precisionUncertaintyFactors({ laboratories: 10, replicates: 2, ratio: 2 }) // => bias 0.57978
  */
 export function precisionUncertaintyFactors(size: PrecisionStudySize): PrecisionUncertaintyFactors {

@@ -52,8 +52,8 @@ export interface RobustPrecisionResult {
  * Ties and equal values: as the estimators. Zero spread: 0. Order of input: does not matter.
  * Numerics: s_L^2 = s_x*^2 - s_r^2 / n, s_R^2 = s_L^2 + s_r^2. O(N log N).
  * Source: ISO 5725-5:1998, 6; the Q method as ISO 13528:2022, Annex C.5.
- * Checked by: tests/stats/precision/robust-precision.test.ts, tests/reference/interlaboratory (creosote, antibody).
- * @example robustPrecision([[1, 1.2], [1.1, 1.2], [1, 1.1], [5, 9]]).repeatabilitySd // => 0.24
+ * Checked by: tests/stats/precision/precision.test.ts, tests/reference/interlaboratory (creosote, antibody).
+ * @example robustPrecision([[1, 1.2], [1.1, 1.2], [1, 1.1], [5, 9]]).repeatabilitySd // => 0.22005
  */
 export function robustPrecision(groups: Groups, options: RobustPrecisionOptions = {}): RobustPrecisionResult {
   const { method = 'algorithms-a-and-s', limitFactor = LIMIT_FACTOR } = options;
