@@ -126,7 +126,10 @@ function workingOf(
     },
     {
       name: 'Standard error of the slope',
-      formula: 'se = sqrt((squares(values) - slope^2 * squares(times)) / (n - 2) / squares(times))',
+      formula:
+        trend.t === null
+          ? 'se = 0 (all results lie on the line)'
+          : 'se = sqrt((squares(values) - slope^2 * squares(times)) / (n - 2) / squares(times))',
       clause,
       inputs: { times, values, slope: trend.slope, n },
       value: trend.standardError,

@@ -1,7 +1,7 @@
 import { studentTUpperQuantile } from '../distributions';
 import { checkValues } from '../internal/check-values';
 import { groupedData } from '../internal/grouped-data';
-import { scaledMean } from '../internal/sums';
+import { largestMagnitude, scaledMean } from '../internal/sums';
 import { StatsError } from '../stats-error';
 import type { WorkingStep } from '../working';
 import { checkAlpha, checkCount } from './check-alpha';
@@ -96,14 +96,17 @@ interface Kept {
 function furthest(kept: readonly Kept[]): { index: number; statistic: number } | null {
   const places = kept.map(({ place }) => place);
   const centre = scaledMean(places, 1);
-  const squares = places.reduce((sum, place) => sum + (place - centre) ** 2, 0);
-  if (places.every((place) => place === places[0])) return null;
+  const largest = largestMagnitude(places.map((place) => place - centre));
+  if (largest === 0) return null;
+  // Relative to the largest, since what is left may lie close together.
+  const relative = places.map((place) => (place - centre) / largest);
+  const squares = relative.reduce((sum, deviation) => sum + deviation ** 2, 0);
   const sd = Math.sqrt(squares / (places.length - 1));
   let best = { index: -1, statistic: 0 };
-  for (const { place, index } of kept) {
-    const statistic = Math.abs(place - centre) / sd;
-    if (statistic > best.statistic * (1 + 1e-12)) best = { index, statistic };
-  }
+  relative.forEach((deviation, i) => {
+    const statistic = Math.abs(deviation) / sd;
+    if (statistic > best.statistic * (1 + 1e-12)) best = { index: kept[i]?.index ?? -1, statistic };
+  });
   return best;
 }
 

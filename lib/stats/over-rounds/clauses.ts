@@ -5,5 +5,6 @@ export const ROUND_CLAUSES = {
   ewma: 'ISO 7870-6:2016; NIST/SEMATECH e-Handbook 6.3.2.4',
   median: 'common practice, no source',
   summary: 'ISO 13528:2022, 10.8 (bias and spread over rounds)',
+  relation: 'relation over rounds: least squares, Spearman 1904, Kruskal and Wallis 1952',
   uncertainty: 'ISO 13528:2022, 9.6 (zeta with z)',
 } as const;

@@ -5,6 +5,8 @@ import { mean } from '../location-scale/mean';
 import { sd } from '../location-scale/sd';
 import { oneWayAnova, type OneWayAnovaResult } from '../precision/one-way-anova';
 import { StatsError } from '../stats-error';
+import type { WorkingStep } from '../working';
+import { ROUND_CLAUSES } from './clauses';
 
 export interface GroupSummary {
   readonly group: string;
@@ -22,6 +24,7 @@ export interface RelationToGroupResult {
   /** Kruskal-Wallis test by ranks: statistic and p by chi-square. */
   readonly rankStatistic: number;
   readonly rankPValue: number;
+  readonly working: readonly WorkingStep[] | null;
 }
 
 /**
@@ -32,6 +35,7 @@ export interface RelationToGroupResult {
  *
  * @param z - scores. Shape: n values. Unit: none. Domain: finite; at least 4.
  * @param labels - the kind of each round. Shape: n texts; at least 2 different.
+ * @param options.working - keep the steps. Default false.
  * @returns means with intervals by group (in order of first appearance), anova, rank test
  * @throws StatsError too-few-values below 4 or with one group only; unequal-lengths; not-finite; no-spread when all z
  *   are equal
@@ -42,7 +46,11 @@ export interface RelationToGroupResult {
  * Checked by: tests/stats/over-rounds/over-rounds.test.ts (R aov, kruskal.test).
  * @example relationToGroup([1, 1.2, -0.9, -1.1], ['A', 'A', 'B', 'B']).groups.map((g) => g.mean) // => [1.1, -1]
  */
-export function relationToGroup(z: readonly number[], labels: readonly string[]): RelationToGroupResult {
+export function relationToGroup(
+  z: readonly number[],
+  labels: readonly string[],
+  options: { readonly working?: boolean } = {},
+): RelationToGroupResult {
   checkValues('relationToGroup', z, 4);
   if (z.length !== labels.length) {
     const found = `found ${z.length} and ${labels.length}`;
@@ -62,12 +70,14 @@ export function relationToGroup(z: readonly number[], labels: readonly string[])
     );
   }
   const values = [...byLabel.values()];
+  const anova = values.some((own) => own.length > 1) ? oneWayAnova(values) : null;
   const { statistic, pValue } = kruskalWallis('relationToGroup', values);
   return {
     groups: [...byLabel].map(([group, own]) => ({ group, rounds: own.length, ...interval(own) })),
-    anova: values.some((own) => own.length > 1) ? oneWayAnova(values) : null,
+    anova,
     rankStatistic: statistic,
     rankPValue: pValue,
+    working: options.working ? workingOf(byLabel, anova) : null,
   };
 }
 
@@ -76,4 +86,27 @@ function interval(own: readonly number[]): Pick<GroupSummary, 'mean' | 'lower' |
   if (own.length < 2) return { mean: centre, lower: null, upper: null };
   const reach = (studentTUpperQuantile(0.025, own.length - 1) * sd(own)) / Math.sqrt(own.length);
   return { mean: centre, lower: centre - reach, upper: centre + reach };
+}
+
+function workingOf(
+  byLabel: ReadonlyMap<string, readonly number[]>,
+  anova: OneWayAnovaResult | null,
+): readonly WorkingStep[] {
+  const clause = ROUND_CLAUSES.relation;
+  const means = [...byLabel].map(([label, z]): WorkingStep => {
+    const inputs = { z, n: z.length };
+    return { name: `Mean of ${label}`, formula: 'mean = sum(z) / n', clause, inputs, value: mean(z) };
+  });
+  if (anova === null || anova.fRatio === null) return means;
+  const own = [...byLabel.values()];
+  const inputs = {
+    n: own.map(({ length }) => length),
+    mean: own.map((z) => mean(z)),
+    s: own.map((z) => (z.length > 1 ? sd(z) : 0)),
+    p: own.length,
+  };
+  const between = 'sum(n * (mean - sum(n * mean) / sum(n))^2) / (p - 1)';
+  const within = '(sum((n - 1) * s^2) / sum(n - 1))';
+  const formula = `F = ${between} / ${within}`;
+  return [...means, { name: 'F ratio', formula, clause, inputs, value: anova.fRatio }];
 }

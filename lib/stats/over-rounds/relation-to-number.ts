@@ -3,6 +3,8 @@ import { checkValues } from '../internal/check-values';
 import { midranks } from '../internal/ranks';
 import { simpleTrend, type SimpleTrend } from '../internal/simple-trend';
 import { StatsError } from '../stats-error';
+import type { WorkingStep } from '../working';
+import { ROUND_CLAUSES } from './clauses';
 
 export interface RelationToNumberResult {
   readonly rounds: number;
@@ -12,6 +14,7 @@ export interface RelationToNumberResult {
   readonly rankCorrelation: number;
   /** Two-sided, by the t approximation; not to be trusted below 10 rounds. Null for a perfect order. */
   readonly rankPValue: number | null;
+  readonly working: readonly WorkingStep[] | null;
 }
 
 /**
@@ -22,7 +25,8 @@ export interface RelationToNumberResult {
  * @param z - scores. Shape: n values. Unit: none. Domain: finite; at least 4.
  * @param numbers - the number of each round; for levels over decades take logarithms first. Shape: n values.
  *   Domain: finite; not all equal.
- * @returns { rounds, trend, rankCorrelation, rankPValue }
+ * @param options.working - keep the steps. Default false.
+ * @returns { rounds, trend, rankCorrelation, rankPValue, working }
  * @throws StatsError too-few-values below 4; unequal-lengths; not-finite; no-spread when all z or all numbers are equal
  *
  * Ties and equal values: mean ranks. Order of input: does not matter, pairs stay together. Numerics: O(n log n).
@@ -30,7 +34,11 @@ export interface RelationToNumberResult {
  * Checked by: tests/stats/over-rounds/over-rounds.test.ts (R lm, cor.test).
  * @example relationToNumber([1, 2, 2, 4], [10, 20, 30, 40]).rankCorrelation // => 0.94868
  */
-export function relationToNumber(z: readonly number[], numbers: readonly number[]): RelationToNumberResult {
+export function relationToNumber(
+  z: readonly number[],
+  numbers: readonly number[],
+  options: { readonly working?: boolean } = {},
+): RelationToNumberResult {
   checkValues('relationToNumber', z, 4);
   if (z.length !== numbers.length) {
     const found = `found ${z.length} and ${numbers.length}`;
@@ -48,17 +56,46 @@ export function relationToNumber(z: readonly number[], numbers: readonly number[
       );
     }
   }
-  const rankCorrelation = correlation(midranks(z).ranks, midranks(numbers).ranks);
+  const [rankZ, rankX] = [midranks(z).ranks, midranks(numbers).ranks];
+  const rankCorrelation = correlation(rankZ, rankX);
   const n = z.length;
   const left = (1 - rankCorrelation) * (1 + rankCorrelation);
+  const t = left > 1e-14 ? Math.abs(rankCorrelation) * Math.sqrt((n - 2) / left) : null;
+  const trend = simpleTrend('relationToNumber', numbers, z);
+  const clause = ROUND_CLAUSES.relation;
+  const ranks = { rank_z: [...rankZ], rank_x: [...rankX] };
+  const working: WorkingStep[] = [
+    {
+      name: 'Slope',
+      formula: 'b = products(x, z) / squares(x)',
+      clause,
+      inputs: { x: numbers, z },
+      value: trend.slope,
+    },
+    {
+      name: 'Standard error of the slope',
+      formula:
+        trend.t === null
+          ? 'se = 0 (all scores lie on the line)'
+          : 'se = sqrt((squares(z) - b^2 * squares(x)) / (n - 2) / squares(x))',
+      clause,
+      inputs: { x: numbers, z, b: trend.slope, n },
+      value: trend.standardError,
+    },
+    {
+      name: 'Rank correlation',
+      formula: 'rho = products(rank_z, rank_x) / sqrt(squares(rank_z) * squares(rank_x))',
+      clause,
+      inputs: ranks,
+      value: rankCorrelation,
+    },
+  ];
   return {
     rounds: n,
-    trend: simpleTrend('relationToNumber', numbers, z),
+    trend,
     rankCorrelation,
-    rankPValue:
-      left > 1e-14
-        ? Math.min(1, 2 * studentTSurvival(Math.abs(rankCorrelation) * Math.sqrt((n - 2) / left), n - 2))
-        : null,
+    rankPValue: t === null ? null : Math.min(1, 2 * studentTSurvival(t, n - 2)),
+    working: options.working ? working : null,
   };
 }
 

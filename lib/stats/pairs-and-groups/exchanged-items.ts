@@ -1,4 +1,4 @@
-import { checkFinite, checkPositive } from '../internal/check-values';
+import { checkFinite, checkPositive, representable } from '../internal/check-values';
 import { StatsError } from '../stats-error';
 
 export interface ItemResult {
@@ -81,7 +81,8 @@ export function exchangedItems(
   return hints.sort((x, y) => worst(x) - worst(y));
 }
 
-const z = ({ assignedValue, sigma }: ItemResult, value: number) => (value - assignedValue) / sigma;
+const z = ({ assignedValue, sigma }: ItemResult, value: number) =>
+  representable('exchangedItems', (value - assignedValue) / sigma);
 
 function hintOf(
   first: ItemResult,

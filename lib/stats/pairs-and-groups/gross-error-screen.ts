@@ -1,5 +1,6 @@
 import { checkFinite, checkPositive } from '../internal/check-values';
 import { StatsError } from '../stats-error';
+import type { WorkingStep } from '../working';
 import { coveredOutside, type LogWindow } from './log-windows';
 
 export interface ScreenedResult {
@@ -29,6 +30,7 @@ export interface GrossErrorScreenOptions {
   readonly matchWithin?: number;
   /** Powers of ten tried, up and down. */
   readonly powers?: number;
+  readonly working?: boolean;
 }
 
 export interface GrossErrorHint {
@@ -57,6 +59,7 @@ export interface GrossErrorScreenResult {
   readonly expectedByChance: number;
   /** False when the assigned value is within matchWithin sigma of zero: factors cannot be told apart there. */
   readonly factorsUsable: boolean;
+  readonly working: readonly WorkingStep[] | null;
 }
 
 /**
@@ -72,6 +75,7 @@ export interface GrossErrorScreenResult {
  * @param options.screenFrom - Default 3, the action limit.
  * @param options.matchWithin - Default 2. Domain: > 0, at most screenFrom.
  * @param options.powers - Domain: whole; 1 to 12. Default 6.
+ * @param options.working - keep the steps. Default false.
  * @returns see GrossErrorScreenResult
  * @throws StatsError too-few-values without results; not-finite; no-spread; out-of-domain
  *
@@ -87,7 +91,7 @@ export function grossErrorScreen(
   input: GrossErrorScreenInput,
   options: GrossErrorScreenOptions = {},
 ): GrossErrorScreenResult {
-  const settings = { screenFrom: 3, matchWithin: 2, powers: 6, ...options };
+  const settings = { screenFrom: 3, matchWithin: 2, powers: 6, working: false, ...options };
   check(input, settings);
   const { results, assignedValue, sigma } = input;
   const explanations = explanationsOf(input, settings.powers);
@@ -124,6 +128,7 @@ export function grossErrorScreen(
     unexplained,
     expectedByChance: chances === null ? 0 : far.length * chances.any,
     factorsUsable,
+    working: settings.working ? workingOf(hints, input) : null,
   };
 }
 
@@ -215,4 +220,28 @@ function chancesOf(
     return share(coveredOutside([window], zone));
   });
   return { each, any: share(coveredOutside(windows, zone)) };
+}
+
+function workingOf(hints: readonly GrossErrorHint[], input: GrossErrorScreenInput): readonly WorkingStep[] {
+  const { assignedValue: x_pt, sigma } = input;
+  return hints.flatMap(({ participant, label, value, factor, corrected, z }): WorkingStep[] => {
+    const clause = 'screen of gross errors: common practice, no source';
+    const name = `${participant}, ${label}`;
+    return [
+      {
+        name: `Corrected: ${name}`,
+        formula: 'c = x / factor',
+        clause,
+        inputs: { x: value, factor },
+        value: corrected,
+      },
+      {
+        name: `z: ${name}`,
+        formula: 'z = (c - x_pt) / sigma',
+        clause,
+        inputs: { c: corrected, x_pt, sigma },
+        value: z,
+      },
+    ];
+  });
 }

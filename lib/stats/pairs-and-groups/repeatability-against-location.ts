@@ -6,6 +6,10 @@ import { algorithmS } from '../location-scale/algorithm-s';
 import { mean } from '../location-scale/mean';
 import { sd } from '../location-scale/sd';
 import { StatsError } from '../stats-error';
+import type { WorkingStep } from '../working';
+import { PAIR_CLAUSES } from './clauses';
+
+const CALLER = 'repeatabilityAgainstLocation';
 
 export interface RepeatabilityPoint {
   readonly mean: number;
@@ -33,11 +37,14 @@ export interface RepeatabilityAgainstLocationResult {
   readonly meansSd: number;
   readonly laboratories: readonly RepeatabilityPoint[];
   readonly contours: readonly [RepeatabilityContour, RepeatabilityContour];
+  /** One step a laboratory with an sd above 0, from its figures and the common ones to its statistic. */
+  readonly working: readonly WorkingStep[] | null;
 }
 
 export interface RepeatabilityAgainstLocationOptions {
   readonly meansSd?: 'within' | 'between';
   readonly contourPoints?: number;
+  readonly working?: boolean;
 }
 
 /**
@@ -51,6 +58,7 @@ export interface RepeatabilityAgainstLocationOptions {
  *   laboratories with the same number of 2 or more results.
  * @param options.meansSd - 'within' (default, as the standard) or 'between' (algorithm A of the means).
  * @param options.contourPoints - points of a contour. Domain: whole; 8 to 1000. Default 72.
+ * @param options.working - keep the steps. Default false.
  * @returns location, withinSd, laboratories with statistics, contours at 95 and 99 percent
  * @throws StatsError too-few-values; unequal-lengths; not-finite; no-spread when the robust within-laboratory sd, or that
  *   of the means for 'between', is 0; out-of-domain
@@ -66,12 +74,11 @@ export function repeatabilityAgainstLocation(
   groups: Groups,
   options: RepeatabilityAgainstLocationOptions = {},
 ): RepeatabilityAgainstLocationResult {
-  const caller = 'repeatabilityAgainstLocation';
-  checkGroups(caller, groups, { groups: 3, each: 2 }, 'laboratory');
-  const replicates = commonCount(caller, groups, 'laboratory');
+  checkGroups(CALLER, groups, { groups: 3, each: 2 }, 'laboratory');
+  const replicates = commonCount(CALLER, groups, 'laboratory');
   const count = options.contourPoints ?? 72;
   if (!(Number.isInteger(count) && count >= 8 && count <= 1000)) {
-    throw new StatsError('out-of-domain', `${caller} requires 8 to 1000 points of a contour, found ${count}`);
+    throw new StatsError('out-of-domain', `${CALLER} requires 8 to 1000 points of a contour, found ${count}`);
   }
   const means = groups.map((group) => mean(group));
   const sds = groups.map((group) => sd(group));
@@ -81,14 +88,16 @@ export function repeatabilityAgainstLocation(
   if (withinSd === 0 || meansSd === 0) {
     throw new StatsError(
       'no-spread',
-      `${caller} requires laboratories with some spread, found a robust sd of 0`,
+      `${CALLER} requires laboratories with some spread, found a robust sd of 0`,
     );
   }
   const centre = { location, withinSd, meansSd, replicates };
+  const laboratories = means.map((x, i) => placeOf(x, sds[i] as number, centre));
   return {
     ...centre,
-    laboratories: means.map((x, i) => placeOf(x, sds[i] as number, centre)),
+    laboratories,
     contours: [contour(0.95, centre, count), contour(0.99, centre, count)],
+    working: options.working ? workingOf(laboratories, centre) : null,
   };
 }
 
@@ -104,8 +113,8 @@ function placeOf(
   s: number,
   { location, withinSd, meansSd, replicates }: Centre,
 ): RepeatabilityPoint {
-  const aside = representable('repeatabilityAgainstLocation', ((x - location) / meansSd) ** 2);
-  const up = s > 0 ? 2 * (replicates - 1) * Math.log(s / withinSd) ** 2 : 0;
+  const aside = representable(CALLER, ((x - location) / meansSd) ** 2);
+  const up = s > 0 ? 2 * (replicates - 1) * logRatio(s, withinSd) ** 2 : 0;
   const pValue = chiSquareSurvival(aside + up, 2);
   return {
     mean: x,
@@ -117,6 +126,12 @@ function placeOf(
   };
 }
 
+/** ln(a / b) of positive numbers whose ratio may leave the number range. */
+function logRatio(a: number, b: number): number {
+  const ratio = a / b;
+  return ratio > 0 && Number.isFinite(ratio) ? Math.log(ratio) : Math.log(a) - Math.log(b);
+}
+
 function contour(
   level: 0.95 | 0.99,
   { location, withinSd, meansSd, replicates }: Centre,
@@ -126,9 +141,31 @@ function contour(
   const points = Array.from({ length: count + 1 }, (_, i) => {
     const angle = (2 * Math.PI * (i % count)) / count;
     return {
-      mean: location + meansSd * radius * Math.cos(angle),
-      sd: withinSd * Math.exp((radius * Math.sin(angle)) / Math.sqrt(2 * (replicates - 1))),
+      mean: representable(CALLER, location + meansSd * radius * Math.cos(angle)),
+      sd: representable(
+        CALLER,
+        withinSd * Math.exp((radius * Math.sin(angle)) / Math.sqrt(2 * (replicates - 1))),
+      ),
     };
   });
   return { level, points };
+}
+
+/** ln(s / w*) is printed as an input, since the formulas have no logarithm. */
+function workingOf(laboratories: readonly RepeatabilityPoint[], centre: Centre): readonly WorkingStep[] {
+  return laboratories.flatMap(({ mean: x, sd: s, statistic }, i): WorkingStep[] => {
+    if (statistic === null) return [];
+    const inputs = {
+      mean: x,
+      x_star: centre.location,
+      s_mean: centre.meansSd,
+      n: centre.replicates,
+      s,
+      w_star: centre.withinSd,
+      ln_s_over_w: logRatio(s, centre.withinSd),
+    };
+    const formula = 'distance2 = ((mean - x_star) / s_mean)^2 + 2 * (n - 1) * ln_s_over_w^2';
+    const name = `Squared distance of laboratory ${i + 1}`;
+    return [{ name, formula, clause: PAIR_CLAUSES.repeatability, inputs, value: statistic }];
+  });
 }

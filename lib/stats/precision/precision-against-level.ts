@@ -1,5 +1,7 @@
 import { checkFinite, checkNotNegative, checkPositive, representable } from '../internal/check-values';
 import { StatsError } from '../stats-error';
+import type { WorkingStep } from '../working';
+import { againstLevelWorking } from './precision-against-level-working';
 
 export interface LevelPrecision {
   readonly mean: number;
@@ -31,6 +33,7 @@ export interface PrecisionAgainstLevelResult {
   readonly logLog: FittedRelation | null;
   /** The one with the smallest misfit, counted per degree of freedom left. A hint: the choice is a judgement. */
   readonly closest: PrecisionRelation;
+  readonly working: readonly WorkingStep[] | null;
 }
 
 const MAX_ITERATIONS = 200;
@@ -44,6 +47,7 @@ const TOLERANCE = 1e-12;
  *
  * @param levels - mean and sd of each level. Shape: q levels. Unit: unit of the data. Domain: finite, sd >= 0; at
  *   least 3 levels; means that differ.
+ * @param options.working - keep the steps. Default false.
  * @returns the four fits, null where a relation cannot hold, and the closest
  * @throws StatsError too-few-values below 3 levels; not-finite; out-of-domain for a negative sd; no-spread when all
  *   means are equal or all sds are 0; no-convergence when the weights do not settle
@@ -55,10 +59,14 @@ const TOLERANCE = 1e-12;
  * @example precisionAgainstLevel([{ mean: 1, sd: 0.2 }, { mean: 2, sd: 0.4 }, { mean: 4, sd: 0.8 }])
  *   // => proportional slope 0.2, logLog slope 1, closest 'proportional'
  */
-export function precisionAgainstLevel(levels: readonly LevelPrecision[]): PrecisionAgainstLevelResult {
+export function precisionAgainstLevel(
+  levels: readonly LevelPrecision[],
+  options: { readonly working?: boolean } = {},
+): PrecisionAgainstLevelResult {
   checkLevels(levels);
   const constant = fit('constant', levels, () => {
     const mean = levels.reduce((sum, { sd }) => sum + sd / levels.length, 0);
+    checkPositive('precisionAgainstLevel', 'mean standard deviation', mean);
     return { intercept: mean, slope: 0, iterations: 1 };
   }) as FittedRelation;
   const positive = levels.every(({ mean }) => mean > 0);
@@ -71,12 +79,11 @@ export function precisionAgainstLevel(levels: readonly LevelPrecision[]): Precis
   const linear = fit('linear', levels, () => weightedLine(levels));
   const logLog =
     positive && levels.every(({ sd }) => sd > 0) ? fit('log-log', levels, () => logLine(levels)) : null;
+  const fits = { constant, proportional, linear, logLog };
   return {
-    constant,
-    proportional,
-    linear,
-    logLog,
+    ...fits,
     closest: closestOf([constant, proportional, linear, logLog]),
+    working: options.working ? againstLevelWorking(levels, fits) : null,
   };
 }
 

@@ -2,11 +2,13 @@ import { describe, expect, it } from 'vitest';
 import {
   cochranCritical,
   dixonCritical,
+  dixonProbability,
   dixonRatioFor,
   esdCritical,
   grubbsCritical,
   grubbsTwoOppositeCritical,
   grubbsTwoSameCritical,
+  grubbsTwoSameProbability,
   mandelCritical,
 } from '@/lib/stats';
 import { dixonTail } from '@/lib/stats/outliers/dixon-distribution';
@@ -207,6 +209,20 @@ describe('critical values of generalised ESD', () => {
       const grubbs = grubbsCritical({ count, alpha: 0.05, sides: 2 });
       expectClose(esdCritical({ count, step: 1, alpha: 0.05 }), grubbs, { rtol: 1e-12 });
     }
+  });
+});
+
+describe('probabilities', () => {
+  it('give the level back at the critical value', () => {
+    for (const sides of [1, 2] as const) {
+      const ratio = grubbsTwoSameCritical({ count: 12, alpha: 0.05, sides });
+      expectClose(grubbsTwoSameProbability({ count: 12, ratio, sides }), 0.05, { rtol: 1e-9 });
+      const statistic = dixonCritical({ count: 9, alpha: 0.01, sides });
+      expectClose(dixonProbability({ count: 9, statistic, sides }), 0.01, { rtol: 1e-9 });
+    }
+    expect(codeOf(() => grubbsTwoSameProbability({ count: 9, ratio: 1.1, sides: 1 }))).toBe('out-of-domain');
+    expect(codeOf(() => dixonProbability({ count: 9, statistic: NaN, sides: 1 }))).toBe('out-of-domain');
+    expect(codeOf(() => dixonProbability({ count: 2, statistic: 0.5, sides: 1 }))).toBe('too-few-values');
   });
 });
 

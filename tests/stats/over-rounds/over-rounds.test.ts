@@ -155,7 +155,8 @@ describe('relations of z', () => {
   it.each(fromR.lines.map((entry) => ({ ...entry, n: entry.x.length })))(
     'computed with R: to a number, $n',
     (entry) => {
-      const found = relationToNumber(entry.y, entry.x);
+      const found = relationToNumber(entry.y, entry.x, { working: true });
+      expect(expectRedone(found.working, { rtol: 1e-8 })).toBe(3);
       expectClose(found.trend.slope, entry.slope, { rtol: 1e-9 });
       expectClose(found.rankCorrelation, entry.rho, { rtol: 1e-12 });
     },
@@ -164,7 +165,8 @@ describe('relations of z', () => {
   it.each(manyRounds)('computed with R: to a kind, data set $i', (entry) => {
     const z = entry.groups.flat();
     const labels = entry.groups.flatMap((own, i) => own.map(() => `kind ${i}`));
-    const found = relationToGroup(z, labels);
+    const found = relationToGroup(z, labels, { working: true });
+    expect(expectRedone(found.working, { rtol: 1e-8 })).toBe(entry.groups.length + 1);
     expectClose(found.rankStatistic, entry.rank, { rtol: 1e-9 });
     expectClose(found.rankPValue, entry.rankPValue, { rtol: 1e-8 });
     expectClose(found.anova?.fRatio ?? NaN, entry.fRatio, { rtol: 1e-9 });

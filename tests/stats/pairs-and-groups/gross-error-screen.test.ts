@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { exchangedItems, grossErrorScreen } from '@/lib/stats';
 import { coveredOutside } from '@/lib/stats/pairs-and-groups/log-windows';
 import { expectClose } from '../expect-close';
+import { expectRedone } from '../expect-redone';
 import { codeOf } from '../hostile';
 
 const screen = (values: readonly number[], more = {}, options = {}) =>
@@ -37,6 +38,11 @@ describe('grossErrorScreen', () => {
       expect(chanceOfAny).toBeLessThan(0.2);
     }
     expectClose(found.expectedByChance, 6 * (found.hints[0]?.chanceOfAny ?? NaN), { rtol: 1e-12 });
+  });
+
+  it('shows its working', () => {
+    expect(expectRedone(screen([98, 1.01, -9.8], {}, { working: true }).working)).toBe(6);
+    expect(screen([98]).working).toBeNull();
   });
 
   it('counts a factor once, by its most particular name', () => {

@@ -301,7 +301,8 @@ describe('precisionAgainstLevel', () => {
       const m = MEANS[i] as number;
       return { mean: m, sd: (0.2 + 0.05 * m) * wobble };
     });
-    const { linear } = precisionAgainstLevel(levels);
+    const { linear, working } = precisionAgainstLevel(levels, { working: true });
+    expect(expectRedone(working)).toBe(6);
     // Normal equations with weights 1 / fitted^2.
     const fitted = linear?.fitted ?? [];
     const residual = levels.map(({ sd: s }, i) => (s - (fitted[i] as number)) / (fitted[i] as number) ** 2);
