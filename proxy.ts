@@ -43,5 +43,5 @@ export function proxy(request: NextRequest): NextResponse {
 
 // Route handlers set their own headers and take large bodies, which should not pass through here.
 export const config = {
-  matcher: ['/((?!api/|_next/static|_next/image|favicon.ico|icon).*)'],
+  matcher: ['/((?!api/|_next/static|_next/image|favicon\\.).*)'],
 };

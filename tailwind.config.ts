@@ -18,7 +18,7 @@ const config: Config = {
         grey: token('grey'),
       },
       fontFamily: { sans: 'var(--sans)', serif: 'var(--serif)' },
-      maxWidth: { page: '80rem', prose: '42rem' },
+      maxWidth: { page: '80rem', measure: '44rem' },
     },
   },
 };

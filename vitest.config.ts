@@ -21,6 +21,8 @@ export default defineConfig({
           exclude: NEEDS_SERVER.concat('tests/slow/**'),
           setupFiles: ['tests/setup-node.ts'],
           execArgv: ['--import', 'tsx'],
+          // Guards against hanging, not against slowness: a machine may be busy with a build as well.
+          testTimeout: 30_000,
         },
       },
       {

@@ -13,7 +13,7 @@ export default function GlobalErrorPage({
   return (
     <html lang="en-GB">
       <body>
-        <main className="mx-auto flex max-w-prose flex-col items-start gap-4 px-4 py-12">
+        <main className="mx-auto flex max-w-measure flex-col items-start gap-4 px-4 py-12">
           <h1>Assize could not show this page</h1>
           <p>
             Something went wrong on our side. What you had saved before is kept.

@@ -8,6 +8,7 @@ import './globals.css';
 export const metadata: Metadata = {
   title: { template: '%s · Assize', default: 'Assize' },
   description: 'Proficiency rounds and method comparison for grain, feed and food safety testing.',
+  icons: { icon: '/favicon.svg' },
   robots: { index: false },
 };
 

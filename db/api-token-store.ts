@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 
 export interface ApiToken {
@@ -44,7 +45,7 @@ export async function createApiToken(
     token_hash: token.tokenHash,
     last_four: token.lastFour,
     created_by: token.createdBy,
-    created_at: new Date().toISOString(),
+    created_at: timestamp(),
     expires_at: token.expiresAt,
   });
   if (id === undefined) throw new Error('the token was given no id');
@@ -80,6 +81,16 @@ export async function listApiTokens(connection: Db, laboratoryId: number): Promi
   }));
 }
 
+export async function countTokensInForce(connection: Db, laboratoryId: number): Promise<number> {
+  const row = await connection('api_tokens')
+    .where({ laboratory_id: laboratoryId })
+    .whereNull('revoked_at')
+    .where('expires_at', '>', timestamp())
+    .count({ count: '*' })
+    .first();
+  return Number(row?.count ?? 0);
+}
+
 /** Returns the token's name, or null when the laboratory has no such token in force. */
 export async function revokeApiToken(
   connection: Db,
@@ -88,7 +99,7 @@ export async function revokeApiToken(
   const rows: { name: string }[] = await connection('api_tokens')
     .where({ id: token.id, laboratory_id: token.laboratoryId })
     .whereNull('revoked_at')
-    .update({ revoked_at: new Date().toISOString() }, ['name']);
+    .update({ revoked_at: timestamp() }, ['name']);
   return rows[0]?.name ?? null;
 }
 

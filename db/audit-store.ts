@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 
 export interface AuditEntry {
@@ -16,7 +17,7 @@ const DETAIL_LENGTH = 1_000;
 /** Adds a line to the log; inside a transaction it stands or falls with what it tells of. */
 export async function addAuditEntry(connection: Db, entry: AuditEntry): Promise<void> {
   await connection('audit_log').insert({
-    at: new Date().toISOString(),
+    at: timestamp(),
     user_id: entry.userId ?? null,
     api_token_id: entry.apiTokenId ?? null,
     laboratory_id: entry.laboratoryId ?? null,

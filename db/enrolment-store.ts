@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 import { fromRow, toRow } from './rows';
 
@@ -36,7 +37,7 @@ export async function createEnrolment(
   connection: Db,
   enrolment: Pick<Enrolment, 'roundId' | 'laboratoryId' | 'participantCode' | 'state'>,
 ): Promise<number> {
-  const now = new Date().toISOString();
+  const now = timestamp();
   const [row] = await connection('enrolments')
     .insert({
       ...toRow(enrolment),

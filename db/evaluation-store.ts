@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 import { fromRow, toRow } from './rows';
 
@@ -122,5 +123,5 @@ export async function createSignOff(
   connection: Db,
   signOff: Pick<SignOff, 'evaluationId' | 'userId' | 'decision' | 'comment'>,
 ): Promise<void> {
-  await connection('sign_offs').insert({ ...toRow(signOff), at: new Date().toISOString() });
+  await connection('sign_offs').insert({ ...toRow(signOff), at: timestamp() });
 }

@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 import { fromRow, toRow, type Row } from './rows';
 
@@ -25,7 +26,7 @@ export async function createLaboratory(
 ): Promise<number> {
   const [id] = await connection('laboratories').insert({
     ...toRow(fields),
-    created_at: new Date().toISOString(),
+    created_at: timestamp(),
   });
   if (id === undefined) throw new Error('the laboratory was given no id');
   return id;

@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Role } from '@/lib/rules/roles';
 import type { Db } from './connection';
 import { fromRow, type Row } from './rows';
@@ -34,7 +35,7 @@ export async function addMembership(connection: Db, membership: NewMembership): 
     role: membership.role,
   };
   if (await connection('memberships').where(row).first('id')) return false;
-  await connection('memberships').insert({ ...row, created_at: new Date().toISOString() });
+  await connection('memberships').insert({ ...row, created_at: timestamp() });
   return true;
 }
 

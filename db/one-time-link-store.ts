@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 
 export type LinkPurpose = 'welcome' | 'reset';
@@ -16,7 +17,7 @@ export async function createOneTimeLink(
     user_id: link.userId,
     purpose: link.purpose,
     token_hash: link.tokenHash,
-    created_at: new Date().toISOString(),
+    created_at: timestamp(),
     expires_at: link.expiresAt,
   });
   if (id === undefined) throw new Error('the link was given no id');
@@ -31,7 +32,7 @@ export async function findOpenLink(
   const row: { id: number; user_id: number } | undefined = await connection('one_time_links')
     .where({ token_hash: link.tokenHash, purpose: link.purpose })
     .whereNull('used_at')
-    .where('expires_at', '>', new Date().toISOString())
+    .where('expires_at', '>', timestamp())
     .first('id', 'user_id');
   return row ? { id: row.id, userId: row.user_id } : null;
 }
@@ -41,7 +42,7 @@ export async function takeLink(connection: Db, id: number): Promise<boolean> {
   const taken = await connection('one_time_links')
     .where({ id })
     .whereNull('used_at')
-    .update({ used_at: new Date().toISOString() });
+    .update({ used_at: timestamp() });
   return taken === 1;
 }
 
@@ -50,7 +51,7 @@ export async function closeLinksOfUser(connection: Db, userId: number): Promise<
   await connection('one_time_links')
     .where({ user_id: userId })
     .whereNull('used_at')
-    .update({ used_at: new Date().toISOString() });
+    .update({ used_at: timestamp() });
 }
 
 export async function countLinksSince(

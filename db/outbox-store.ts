@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 import { fromRow, type Row } from './rows';
 
@@ -27,7 +28,7 @@ export interface StoredMail {
 
 /** Puts mail in the outbox; the same key is kept once, so that nothing is sent twice. */
 export async function addMail(connection: Db, mail: Mail): Promise<void> {
-  const now = new Date().toISOString();
+  const now = timestamp();
   await connection('outbox')
     .insert({
       dedupe_key: mail.dedupeKey,
@@ -72,7 +73,7 @@ export async function claimMail(
 export async function markMailSent(connection: Db, id: number, body: string): Promise<void> {
   await connection('outbox')
     .where({ id })
-    .update({ state: 'sent', sent_at: new Date().toISOString(), last_error: '', body });
+    .update({ state: 'sent', sent_at: timestamp(), last_error: '', body });
 }
 
 /** Notes a failure; without a time for another try the mail is given up. */
@@ -92,6 +93,6 @@ export async function markMailFailed(
 export async function requeueMail(connection: Db, id: number): Promise<boolean> {
   const changed = await connection('outbox')
     .where({ id, state: 'failed' })
-    .update({ state: 'waiting', attempts: 0, next_attempt_at: new Date().toISOString() });
+    .update({ state: 'waiting', attempts: 0, next_attempt_at: timestamp() });
   return changed > 0;
 }

@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 import { fromRow, toRow } from './rows';
 
@@ -62,7 +63,7 @@ export async function createRound(
   round: RoundPlan & Pick<Round, 'slug' | 'schemeId' | 'createdBy'>,
 ): Promise<number> {
   const [row] = await connection('rounds')
-    .insert({ ...toRow(round), state: 'draft', created_at: new Date().toISOString() })
+    .insert({ ...toRow(round), state: 'draft', created_at: timestamp() })
     .returning('id');
   return row.id;
 }

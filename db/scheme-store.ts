@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 import { fromRow, toRow } from './rows';
 
@@ -32,7 +33,7 @@ export async function createScheme(
   scheme: Omit<Scheme, 'id' | 'createdAt'>,
 ): Promise<number> {
   const [row] = await connection('schemes')
-    .insert({ ...toRow(scheme), created_at: new Date().toISOString() })
+    .insert({ ...toRow(scheme), created_at: timestamp() })
     .returning('id');
   return row.id;
 }

@@ -1,14 +1,22 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 
+/** Begins with the laboratory that the person chose last. */
 export async function createSession(
   connection: Db,
   session: { id: string; userId: number; expiresAt: string },
 ): Promise<void> {
+  const last: { laboratory_id: number | null } | undefined = await connection('sessions')
+    .where({ user_id: session.userId })
+    .whereNotNull('laboratory_id')
+    .orderBy('created_at', 'desc')
+    .first('laboratory_id');
   await connection('sessions').insert({
     id: session.id,
     user_id: session.userId,
-    created_at: new Date().toISOString(),
+    laboratory_id: last?.laboratory_id ?? null,
+    created_at: timestamp(),
     expires_at: session.expiresAt,
   });
 }
@@ -25,7 +33,7 @@ export async function endSession(connection: Db, sessionId: string): Promise<voi
   await connection('sessions')
     .where({ id: sessionId })
     .whereNull('ended_at')
-    .update({ ended_at: new Date().toISOString() });
+    .update({ ended_at: timestamp() });
 }
 
 /** Ends every session of a person, but one when `exceptId` is given; returns how many ended. */
@@ -36,14 +44,14 @@ export async function endSessionsOfUser(
 ): Promise<number> {
   const query = connection('sessions').where({ user_id: userId }).whereNull('ended_at');
   if (options.exceptId) query.whereNot({ id: options.exceptId });
-  return query.update({ ended_at: new Date().toISOString() });
+  return query.update({ ended_at: timestamp() });
 }
 
 export async function countOpenSessions(connection: Db, userId: number): Promise<number> {
   const row = await connection('sessions')
     .where({ user_id: userId })
     .whereNull('ended_at')
-    .where('expires_at', '>', new Date().toISOString())
+    .where('expires_at', '>', timestamp())
     .count({ count: '*' })
     .first();
   return Number(row?.count ?? 0);

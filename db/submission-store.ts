@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 import { fromRow, toRow } from './rows';
 
@@ -53,7 +54,7 @@ export async function keepUpload(connection: Db, sha256: string, bytes: Uint8Arr
       sha256,
       bytes: Buffer.from(bytes),
       byte_count: bytes.byteLength,
-      created_at: new Date().toISOString(),
+      created_at: timestamp(),
     })
     .returning('id');
   return row.id;
@@ -68,6 +69,20 @@ export async function findCurrentSubmission(
     .where({ 'submissions.enrolment_id': enrolmentId, 'submissions.state': 'submitted' })
     .first('submissions.*', 'uploads.sha256');
   return row ? fromRow<Submission & { sha256: string }>(row) : null;
+}
+
+/** The laboratories whose results that count came from themselves, not with a whole round. */
+export async function listOwnSenders(
+  connection: Db,
+  roundId: number,
+): Promise<{ laboratoryId: number; name: string }[]> {
+  return connection('submissions')
+    .join('enrolments', 'enrolments.id', 'submissions.enrolment_id')
+    .join('laboratories', 'laboratories.id', 'enrolments.laboratory_id')
+    .where({ 'submissions.round_id': roundId, 'submissions.state': 'submitted' })
+    .whereNot('submissions.channel', 'whole-round')
+    .orderBy('laboratories.name')
+    .select('laboratories.id as laboratoryId', 'laboratories.name as name');
 }
 
 export async function markSuperseded(connection: Db, id: number): Promise<void> {

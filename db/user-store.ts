@@ -1,4 +1,5 @@
 import 'server-only';
+import { timestamp } from './clock';
 import type { Db } from './connection';
 import { fromRow, type Row } from './rows';
 
@@ -19,7 +20,7 @@ function toUser(row: Row): User {
 }
 
 function selectUsers(connection: Db) {
-  return connection('users').select(COLUMNS, connection.raw('password_hash is not null as has_password'));
+  return connection('users').select(...COLUMNS, connection.raw('password_hash is not null as has_password'));
 }
 
 export async function createUser(
@@ -30,7 +31,7 @@ export async function createUser(
     email: user.email.toLowerCase(),
     name: user.name,
     password_hash: user.passwordHash ?? null,
-    created_at: new Date().toISOString(),
+    created_at: timestamp(),
   });
   if (id === undefined) throw new Error('the user was given no id');
   return id;

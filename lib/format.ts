@@ -25,9 +25,9 @@ export function showMinus(text: string): string {
   return text.replace(/(^|[<>=\s(])-(?=[\d.])/g, `$1${MINUS}`).replace(/([eE])-(?=\d)/g, `$1${MINUS}`);
 }
 
-/** Digits after the decimal point of a figure as written, exponent and all left aside. */
+/** Digits after the decimal point of a figure as written; an exponent or a remark behind it is left aside. */
 export function countDecimals(text: string): number {
-  return /\.(\d+)/.exec(text)?.[1]?.length ?? 0;
+  return /^[^\s.]*\.(\d+)/.exec(text)?.[1]?.length ?? 0;
 }
 
 /** Figures to show for a number whose column has no fixed decimals: three or more significant digits. */

@@ -38,7 +38,7 @@ export function describeError(error: unknown): DescribedError {
     return { type: typeof error, message: 'something that is no Error was thrown' };
   const code = 'code' in error && typeof error.code === 'string' ? error.code : undefined;
   const isFromDatabase = code?.startsWith('SQLITE') ?? false;
-  const message = isFromDatabase ? error.message.slice(error.message.lastIndexOf(' - ') + 1) : error.message;
+  const message = isFromDatabase ? (error.message.split(' - ').at(-1) ?? '') : error.message;
   const frames = error.stack?.split('\n').filter((line) => line.startsWith('    at '));
   return {
     type: error.name,

@@ -11,7 +11,7 @@ import { listServing } from './lib/serving.mjs';
 
 const DEFAULT_PORT = 3000;
 const HIGHEST_PORT = 65_535;
-const NO_DEMO = { signIns: [], tokens: [], seeded: false };
+const NO_DEMO = { signIns: [], tokens: [], openRound: null, seeded: false };
 const OWN_MACHINE = [LOCAL_HOST, 'localhost', '::1'];
 
 /** Installs, migrates, seeds, builds and serves, doing of each only what is still to be done. */

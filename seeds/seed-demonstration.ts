@@ -8,7 +8,6 @@ import { PASSWORDS } from './scenario/people';
 import { ROUNDS } from './scenario/rounds';
 import { demoSummary, type DemoSummary } from './summary';
 import { Calendar } from './story/calendar';
-import { withStoryClock } from './story/clock';
 import { tellInOrder } from './story/happening';
 import { tokenHappenings, writeCast, type PasswordHashes } from './write/cast';
 import { roundStory } from './write/round-story';
@@ -49,13 +48,11 @@ export async function seedDemonstration(connection: Db, options: SeedOptions): P
   const laboratoryCount = options.laboratoryCount ?? FEWEST_LABORATORIES;
   if (await hasUsers(connection)) return recallDemonstration(connection);
   const hashes = await hashPasswords();
-  const isSeeded = await withStoryClock(() =>
-    inTransaction(connection, async (trx) => {
-      if (await hasUsers(trx)) return false;
-      await tellStory(trx, { ...options, laboratoryCount }, hashes);
-      return true;
-    }),
-  );
+  const isSeeded = await inTransaction(connection, async (trx) => {
+    if (await hasUsers(trx)) return false;
+    await tellStory(trx, { ...options, laboratoryCount }, hashes);
+    return true;
+  });
   return isSeeded ? demoSummary({ seeded: true }) : recallDemonstration(connection);
 }
 

@@ -29,7 +29,7 @@ const OWN_SETTINGS = {
   NEXTAUTH_URL: undefined,
   NEXTAUTH_SECRET: undefined,
 };
-const NO_DEMO: Demo = { signIns: [], tokens: [], seeded: false };
+const NO_DEMO: Demo = { signIns: [], tokens: [], openRound: null, seeded: false };
 
 /** Builds when stale, prepares the data and runs one server for all files of the project. */
 export default async function setup(project: TestProject): Promise<() => Promise<void>> {

@@ -23,7 +23,7 @@ export function ButtonForm<T>(props: ButtonFormProps<T>) {
   const { action, fields, label, about, pendingLabel, done, variant = 'quiet', size = 'small' } = props;
   const [state, submit] = useActionState<FormState<T>, FormData>(action, null);
   return (
-    <form action={submit} className="flex flex-col items-start gap-1">
+    <form action={submit} className="flex flex-col items-start [&>div:not(:empty)]:mt-1">
       {Object.entries(fields).map(([name, value]) => (
         <input key={name} type="hidden" name={name} value={value} />
       ))}

@@ -26,7 +26,14 @@ export function DropDown({ label, children }: { label: ReactNode; children: Reac
   }
 
   return (
-    <details ref={details} onKeyDown={onKeyDown} onClick={onClick} className="group relative">
+    // It may have been opened before the script came, which is no mistake.
+    <details
+      suppressHydrationWarning
+      ref={details}
+      onKeyDown={onKeyDown}
+      onClick={onClick}
+      className="group relative"
+    >
       <summary className="flex min-h-9 max-w-56 list-none items-center gap-1.5 font-semibold text-press hover:text-press-strong [&::-webkit-details-marker]:hidden">
         <span className="truncate">{label}</span>
         <svg

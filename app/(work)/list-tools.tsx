@@ -25,7 +25,7 @@ export function SearchForm({ path, text, label }: { path: string; text: string; 
       />
       <Button type="submit">Search</Button>
       {text && (
-        <Link href={path} className="text-link inline-flex min-h-9 items-center">
+        <Link href={path} className="text-link inline-flex min-h-11 md:min-h-9 items-center">
           Show all
         </Link>
       )}

@@ -8,6 +8,8 @@ export type ChartTableColumn = { label: string; decimals?: number; numeric?: boo
 export type ChartTable = { columns: ChartTableColumn[]; rows: (string | number | null)[][] };
 export type ChartFigureProps = {
   title: string;
+  /** Level of the title among the headings of the page. */
+  level?: 2 | 3 | 4;
   caption?: ReactNode;
   table: ChartTable;
   fileName: string;
@@ -16,11 +18,22 @@ export type ChartFigureProps = {
 };
 
 /** The frame of every chart: title, drawing, caption, the numbers behind it, and saving it. */
-export function ChartFigure({ title, caption, table, fileName, note = '', children }: ChartFigureProps) {
+export function ChartFigure({
+  title,
+  level = 2,
+  caption,
+  table,
+  fileName,
+  note = '',
+  children,
+}: ChartFigureProps) {
   const id = useId();
+  const Heading = `h${level}` as const;
   return (
     <figure aria-labelledby={id} className="border-t pt-3">
-      <h3 id={id}>{title}</h3>
+      <Heading id={id} className="text-lg">
+        {title}
+      </Heading>
       <div className="mt-2">
         <ChartReadout>{children}</ChartReadout>
       </div>

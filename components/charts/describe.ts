@@ -33,7 +33,8 @@ export function describeResults(
   const show = (value: number | undefined) => formatNumber(value, decimals);
   if (values.length === 0) return 'No numeric result.';
   return (
-    `${formatCount(values.length, 'result')} from ${show(values[0])} to ${show(values.at(-1))} ${unit}; ` +
+    `${formatCount(values.length, 'result')}${values.length > 1 ? ` from ${show(values[0])} to` : ','} ` +
+    `${show(values.at(-1))} ${unit}; ` +
     `assigned value ${show(assigned.value)} ${unit}, sigma_pt ${formatNumber(assigned.sigmaPt, decimals + 1)} ${unit}. ` +
     countSignals(results.map((result) => result.signal))
   );

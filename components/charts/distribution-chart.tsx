@@ -22,17 +22,19 @@ export type DistributionChartProps = {
   density?: readonly CurvePoint[];
   bandwidth?: number;
   fileName?: string;
+  level?: 2 | 3 | 4;
 };
 
 /** The results of a round as a density curve, with every result as a mark below it. */
 export function DistributionChart(props: DistributionChartProps) {
-  const { title, results, unit, decimals, leftOut = 0, fileName = 'distribution' } = props;
+  const { title, results, unit, decimals, leftOut = 0, fileName = 'distribution', level } = props;
   const description = describeResults(results, props);
   const asWhole = results.length > MOST_MARKS;
   const own = results.find((result) => result.own);
   return (
     <ChartFigure
       title={title}
+      level={level}
       fileName={fileName}
       note={`Horizontal axis: result in ${unit}.`}
       caption={

@@ -9,7 +9,6 @@ const COPIED_STYLES = [
   'font-style',
   'font-weight',
   'text-anchor',
-  'opacity',
   'color',
 ] as const;
 const FONT = "'Source Sans 3', 'Source Sans Pro', Arial, sans-serif";
@@ -38,8 +37,7 @@ function copyWithStyles(svg: SVGSVGElement): SVGSVGElement {
   [svg, ...svg.querySelectorAll<SVGElement>('*')].forEach((original, index) => {
     const target = copies[index];
     if (!target || original instanceof SVGDescElement) return;
-    const style = getComputedStyle(original);
-    for (const name of COPIED_STYLES) target.style.setProperty(name, style.getPropertyValue(name));
+    writeStyles(target, original, original === svg ? null : original.parentElement);
     for (const name of ['class', 'tabindex', 'role', 'data-detail', 'data-chart'])
       target.removeAttribute(name);
   });
@@ -49,6 +47,16 @@ function copyWithStyles(svg: SVGSVGElement): SVGSVGElement {
   ground.setAttribute('fill', getComputedStyle(document.documentElement).getPropertyValue('--paper').trim());
   copy.prepend(ground);
   return copy;
+}
+
+/** All of these are inherited, so only what differs from the parent has to be written. */
+function writeStyles(target: SVGElement, original: SVGElement, parent: Element | null): void {
+  const style = getComputedStyle(original);
+  const inherited = parent ? getComputedStyle(parent) : null;
+  for (const name of COPIED_STYLES) {
+    const value = style.getPropertyValue(name);
+    if (value !== inherited?.getPropertyValue(name)) target.style.setProperty(name, value);
+  }
 }
 
 /** Nothing is painted between the two changes, so the reader does not see them. */

@@ -1,7 +1,7 @@
 import { formatCount, formatScore, type ScoreKind } from '@/lib/format';
 import { LeftAxis } from './axes';
 import { ChartFigure } from './chart-figure';
-import { MOST_MARKS, type ChartSize } from './chart-size';
+import { MOST_MARKS, px, type ChartSize } from './chart-size';
 import { ChartInTwoSizes } from './chart-svg';
 import type { ScorePoint } from './chart-types';
 import { describeScores, signalWords } from './describe';
@@ -22,6 +22,7 @@ export type OrderedScoresChartProps = {
   scoreName?: string;
   scoreKind?: ScoreKind;
   fileName?: string;
+  level?: 2 | 3 | 4;
 };
 
 /** The scores of a round in ascending order, one bar a participant code. */
@@ -31,6 +32,7 @@ export function OrderedScoresChart({
   scoreName = 'z',
   scoreKind = 'z',
   fileName = 'scores',
+  level,
 }: OrderedScoresChartProps) {
   const description = describeScores(points, scoreName, scoreKind);
   const scored = orderScores(points);
@@ -40,6 +42,7 @@ export function OrderedScoresChart({
   return (
     <ChartFigure
       title={title}
+      level={level}
       fileName={fileName}
       note={`Vertical axis: ${scoreName}.`}
       caption={
@@ -86,7 +89,7 @@ type DrawingProps = {
 
 function Drawing({ points, size, scoreName, scoreKind, focusable }: DrawingProps) {
   const geometry = orderedScoresGeometry(points, size);
-  const { y, left, right, zero, bars, markSize, codesTop } = geometry;
+  const { y, left, right, zero, bars, markSize, codesTop, step, top } = geometry;
   return (
     <>
       <LeftAxis scale={y} left={left} title={scoreName} />
@@ -100,6 +103,7 @@ function Drawing({ points, size, scoreName, scoreKind, focusable }: DrawingProps
           focusable={focusable}
           detail={`${bar.point.code}${bar.point.own ? ' (own)' : ''}: ${scoreName} = ${formatScore(bar.point.score, scoreKind)}${signalWords(bar.point.signal)}`}
         >
+          {focusable && <HitArea bar={bar} step={step} top={top} bottom={size.height - 6} />}
           <Bar bar={bar} markSize={markSize} codesTop={codesTop} scoreKind={scoreKind} />
         </Mark>
       ))}
@@ -113,6 +117,19 @@ function Drawing({ points, size, scoreName, scoreKind, focusable }: DrawingProps
         aria-hidden="true"
       />
     </>
+  );
+}
+
+/** The whole column answers to the pointer: small bars would be hard to meet. */
+function HitArea({ bar, step, top, bottom }: { bar: ScoreBar; step: number; top: number; bottom: number }) {
+  return (
+    <rect
+      x={px(bar.middle - step / 2)}
+      y={top}
+      width={step}
+      height={px(bottom - top)}
+      className="fill-transparent"
+    />
   );
 }
 

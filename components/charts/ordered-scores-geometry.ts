@@ -19,9 +19,10 @@ export type ScoreBar = {
 };
 
 const MARGIN = { left: 40, right: 44, axis: 10 };
-const VALUE_ROOM = 48;
+const VALUE_ROOM = 54;
 const LABEL_GAP = 14;
-const LETTER = 7.4;
+// Wide enough for the plain sans serif that a saved picture may have to fall back on.
+const LETTER = 8.6;
 
 export function hasScore(point: ScorePoint): point is ScorePoint & { score: number } {
   return point.score !== null && point.signal !== 'not-scored';
@@ -77,6 +78,8 @@ export function orderedScoresGeometry(points: readonly ScorePoint[], { width, he
     bars,
     y,
     zero: px(y(0)),
+    top,
+    step: px(x.step()),
     left: MARGIN.left,
     right: width - MARGIN.right,
     codesTop: px(height - codeRoom + 4),

@@ -18,17 +18,19 @@ export type RoundBarsProps = {
   decimals: number;
   leftOut?: number;
   fileName?: string;
+  level?: 2 | 3 | 4;
 };
 
 /** All results of a round in ascending order, with the reader's own as a bar from the assigned value. */
 export function RoundBars(props: RoundBarsProps) {
-  const { title, results, unit, decimals, leftOut = 0, fileName = 'own-result' } = props;
+  const { title, results, unit, decimals, leftOut = 0, fileName = 'own-result', level } = props;
   const description = describeResults(results, props);
   const own = results.find((result) => result.own);
   const asWhole = results.length > MOST_MARKS;
   return (
     <ChartFigure
       title={title}
+      level={level}
       fileName={fileName}
       note={`Vertical axis: result in ${unit}.`}
       caption={

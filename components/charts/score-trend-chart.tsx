@@ -16,6 +16,7 @@ export type ScoreTrendChartProps = {
   scoreName?: string;
   scoreKind?: ScoreKind;
   fileName?: string;
+  level?: 2 | 3 | 4;
 };
 
 /** The score of one laboratory over rounds, oldest first. */
@@ -25,6 +26,7 @@ export function ScoreTrendChart({
   scoreName = 'z',
   scoreKind = 'z',
   fileName = 'trend',
+  level,
 }: ScoreTrendChartProps) {
   const description = describeTrend(rounds, scoreName, scoreKind);
   const missing = rounds.filter((round) => round.score === null || round.signal === 'not-scored').length;
@@ -32,6 +34,7 @@ export function ScoreTrendChart({
   return (
     <ChartFigure
       title={title}
+      level={level}
       fileName={fileName}
       note={`Vertical axis: ${scoreName}. Horizontal axis: rounds, oldest first.`}
       caption={

@@ -1,7 +1,14 @@
 'use client';
 
+import dynamic from 'next/dynamic';
 import { FormDialog } from './form-dialog';
-import { MeasurandForm, type MeasurandFormProps } from './measurand-form';
+import { FormOnItsWay } from './form-on-its-way';
+import type { MeasurandFormProps } from './measurand-form';
+
+// The form checks while one types, which takes code that the page itself does not need.
+const MeasurandForm = dynamic(() => import('./measurand-form').then((module) => module.MeasurandForm), {
+  loading: FormOnItsWay,
+});
 
 export function MeasurandDialog(props: Omit<MeasurandFormProps, 'onDone'>) {
   const isNew = props.values.id === undefined;

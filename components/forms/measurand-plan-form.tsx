@@ -4,7 +4,6 @@ import { Checkbox, NumberInput, Select, TextInput } from '@/components/ui/contro
 import { FormMessage } from '@/components/ui/form-message';
 import { SubmitButton } from '@/components/ui/submit-button';
 import { ASSIGNED_METHOD_NAMES, roundMeasurandSchema, SCORE_KIND_NAMES } from '@/lib/schemas/rounds';
-import { FormDialog } from './form-dialog';
 import { SigmaFields } from './sigma-fields';
 import { useCheckedForm } from './use-checked-form';
 import type { FormAction } from './use-server-form';
@@ -32,21 +31,7 @@ export type MeasurandPlanProps = {
 const optionsOf = (names: Record<string, string>) =>
   Object.entries(names).map(([value, label]) => ({ value, label }));
 
-export function MeasurandPlanDialog(props: MeasurandPlanProps) {
-  return (
-    <FormDialog
-      label={`Change ${props.measurand.name}`}
-      title={`How ${props.measurand.name} is evaluated`}
-      variant="quiet"
-      size="small"
-      wide
-    >
-      {(close) => <MeasurandPlanForm {...props} onDone={close} />}
-    </FormDialog>
-  );
-}
-
-function MeasurandPlanForm({
+export function MeasurandPlanForm({
   action,
   round,
   measurand,

@@ -1,7 +1,13 @@
 'use client';
 
+import dynamic from 'next/dynamic';
 import { FormDialog } from './form-dialog';
-import { RoundForm, type RoundFormProps } from './round-form';
+import { FormOnItsWay } from './form-on-its-way';
+import type { RoundFormProps } from './round-form';
+
+const RoundForm = dynamic(() => import('./round-form').then((module) => module.RoundForm), {
+  loading: FormOnItsWay,
+});
 
 export function RoundDialog(props: Omit<RoundFormProps, 'onDone'>) {
   return (

@@ -37,7 +37,7 @@ type Form = ReturnType<typeof useCheckedForm>;
 export function RoundForm({ action, values, round, schemes, scheme, isOpen, onDone }: RoundFormProps) {
   const form = useCheckedForm(roundSchema, action, { ...values, scheme: scheme ?? '' }, onDone);
   return (
-    <form {...form.formProps} className="flex max-w-prose flex-col gap-5">
+    <form {...form.formProps} className="flex max-w-measure flex-col gap-5">
       {round && <input type="hidden" name="round" value={round} />}
       {schemes && (
         <Select

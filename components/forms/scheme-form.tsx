@@ -14,7 +14,7 @@ export type SchemeFormProps = {
 export function SchemeForm({ action, scheme, onDone }: SchemeFormProps) {
   const form = useServerForm(action, onDone);
   return (
-    <form {...form.formProps} className="flex max-w-prose flex-col gap-4">
+    <form {...form.formProps} className="flex max-w-measure flex-col gap-4">
       {scheme && <input type="hidden" name="scheme" value={scheme.slug} />}
       <TextInput
         label="Name"

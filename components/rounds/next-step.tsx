@@ -1,15 +1,15 @@
 import type { ReactNode } from 'react';
 import { ConfirmDialog, type ConfirmOutcome } from '@/components/ui/confirm-dialog';
 import { formatCount, formatDateTime } from '@/lib/format';
-import type { Blocker, NextStep as Step, RoundFacts } from '@/lib/rules/round-states';
+import type { NextStep as Step, RoundFacts } from '@/lib/rules/round-states';
 
 type Action = (form: FormData) => Promise<ConfirmOutcome>;
 
 export type NextStepProps = {
   step: Step;
   facts: RoundFacts;
-  blockers: readonly Blocker[];
   now: string;
+  publishAt: string;
   action: Action;
 };
 
@@ -37,8 +37,8 @@ export function stepLabel(step: Step): string {
 }
 
 /** The one button that moves a round on, with what follows from it. */
-export function NextStep({ step, facts, now, action }: Omit<NextStepProps, 'blockers'>) {
-  const words = WORDS[step];
+export function NextStep({ action, ...about }: NextStepProps) {
+  const words = WORDS[about.step];
   return (
     <ConfirmDialog
       triggerLabel={words.label}
@@ -46,15 +46,15 @@ export function NextStep({ step, facts, now, action }: Omit<NextStepProps, 'bloc
       title={words.title}
       confirmLabel={words.confirm}
       pendingLabel={words.pending}
-      fields={{ round: facts.slug }}
+      fields={{ round: about.facts.slug }}
       action={action}
     >
-      <div className="flex flex-col gap-2">{consequences(step, facts, now)}</div>
+      <div className="flex flex-col gap-2">{consequences(about)}</div>
     </ConfirmDialog>
   );
 }
 
-function consequences(step: Step, facts: RoundFacts, now: string): ReactNode {
+function consequences({ step, facts, now, publishAt }: Omit<NextStepProps, 'action'>): ReactNode {
   if (step === 'open') return <OpenWords facts={facts} />;
   if (step === 'close') return <CloseWords facts={facts} now={now} />;
   if (step === 'evaluate') {
@@ -65,6 +65,9 @@ function consequences(step: Step, facts: RoundFacts, now: string): ReactNode {
           They are kept as a version that never changes. A reviewer other than you signs it before it can be
           published.
         </p>
+        {facts.measurandsWithoutResult.length > 0 && (
+          <p>Without a numeric result, and so without scores: {facts.measurandsWithoutResult.join(', ')}.</p>
+        )}
       </>
     );
   }
@@ -74,6 +77,11 @@ function consequences(step: Step, facts: RoundFacts, now: string): ReactNode {
         Each laboratory sees its scores beside the other participants, who stay codes. This cannot be undone.
       </p>
       {!facts.isPast && <p>The people of the participating laboratories get a message.</p>}
+      {!facts.isPast && publishAt > now && (
+        <p className="font-semibold">
+          Publication is planned for {formatDateTime(publishAt)}. You are early.
+        </p>
+      )}
       <p>Signed by {facts.signedBy}.</p>
     </>
   );

@@ -31,7 +31,11 @@ function WideLine({ stages, today, currentPlace, layout }: RoundLineProps & { la
       {stages.map((stage, index) => (
         <li key={stage.key} className="relative min-w-0">
           <Stretch index={index} last={index === stages.length - 1} layout={layout} today={today} />
-          <StageLink stage={stage} here={stage.key === currentPlace} className="group relative block pr-2">
+          <StageLink
+            stage={stage}
+            here={stage.key === currentPlace}
+            className="group/stage relative block pr-2"
+          >
             <StageMark state={stage.state} className="block bg-paper" />
             <StageText stage={stage} today={today} here={stage.key === currentPlace} />
           </StageLink>
@@ -85,7 +89,7 @@ function NarrowLine({ stages, today, currentPlace }: RoundLineProps) {
   const here = stages.find((stage) => stage.key === currentPlace);
   return (
     // A new key for each place closes the list once a stage has been chosen.
-    <details key={currentPlace} className="group md:hidden print:hidden">
+    <details key={currentPlace} className="group/list md:hidden print:hidden">
       <summary className="flex min-h-11 list-none items-center gap-3 [&::-webkit-details-marker]:hidden">
         <span aria-hidden="true" className="relative flex gap-2.5">
           <span className="absolute inset-x-0 top-1/2 h-px bg-rule-strong" />
@@ -99,7 +103,11 @@ function NarrowLine({ stages, today, currentPlace }: RoundLineProps) {
           ))}
         </span>
         <span className="font-semibold">{here?.label ?? 'Stages'}</span>
-        <svg viewBox="0 0 12 8" aria-hidden="true" className="ml-auto w-3 stroke-press group-open:rotate-180">
+        <svg
+          viewBox="0 0 12 8"
+          aria-hidden="true"
+          className="ml-auto w-3 stroke-press group-open/list:rotate-180"
+        >
           <path d="m1 1 5 5 5-5" fill="none" strokeWidth="1.8" />
         </svg>
         <span className="sr-only">, show all stages of the round</span>
@@ -160,7 +168,7 @@ function StageText({
         className={cx(
           'inline-block border-b-3',
           here ? 'border-maize font-semibold text-ink' : 'border-transparent',
-          !here && (stage.href ? 'text-press group-hover:border-rule' : 'text-ink-faint'),
+          !here && (stage.href ? 'text-press group-hover/stage:border-rule' : 'text-ink-faint'),
           stage.state === 'cancelled' && 'line-through',
         )}
       >

@@ -21,8 +21,8 @@ export function RoundNavigation({ base, stages, pages, signedAt, today }: RoundN
   return (
     <div className="no-print flex flex-col gap-2">
       <RoundLine stages={stages} today={today} currentPlace={placeOf(segment, signedAt)} />
-      <nav aria-label="Pages of the round" className="-mx-4 overflow-x-auto px-4 md:mx-0 md:px-0">
-        <ul className="flex gap-x-5 border-b">
+      <nav aria-label="Pages of the round" className="border-b">
+        <ul className="flex flex-wrap gap-x-5">
           {pages.map(({ page, label }) => (
             <li key={page}>
               <Link

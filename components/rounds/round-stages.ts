@@ -43,6 +43,7 @@ function milestones({ round, signedAt, now }: StageInput): Milestone[] {
   const isOpened = reached('open', round.openedAt);
   const isEvaluated = reached('evaluated', round.evaluatedAt);
   const isSigned = isEvaluated && signedAt !== null;
+  // A past round is loaded long after its days; the days it was held on are what its line shows.
   const asPlanned = (stamp: string | null, planned: string) => (round.isPast ? planned : stamp);
   return [
     {
@@ -67,7 +68,8 @@ function milestones({ round, signedAt, now }: StageInput): Milestone[] {
       key: 'dispatched',
       label: 'Dispatched',
       page: 'items',
-      doneAt: round.dispatchAt,
+      // Closed before the planned day: when the items went out is then not known.
+      doneAt: round.dispatchAt <= now ? round.dispatchAt : null,
       isDone: isOpened && (round.dispatchAt <= now || reached('closed', round.closedAt)),
       plannedAt: round.dispatchAt,
       step: null,
@@ -85,7 +87,7 @@ function milestones({ round, signedAt, now }: StageInput): Milestone[] {
       key: 'evaluated',
       label: 'Evaluated',
       page: 'evaluation',
-      doneAt: asPlanned(round.evaluatedAt, round.publishAt),
+      doneAt: round.isPast ? null : round.evaluatedAt,
       isDone: isEvaluated,
       plannedAt: null,
       step: 'evaluate',
@@ -94,7 +96,7 @@ function milestones({ round, signedAt, now }: StageInput): Milestone[] {
       key: 'signed',
       label: 'Signed',
       page: 'evaluation',
-      doneAt: asPlanned(signedAt, round.publishAt),
+      doneAt: round.isPast ? null : signedAt,
       isDone: isSigned,
       plannedAt: null,
       step: isSigned ? null : 'publish',

@@ -27,12 +27,12 @@ export type RoundTableProps = {
 
 export function RoundTable({ caption, hideCaption = true, rounds, hideScheme }: RoundTableProps) {
   return (
-    <Table caption={caption} hideCaption={hideCaption} fullHeight>
+    <Table caption={caption} hideCaption={hideCaption} fullHeight stacked className="md:table-fixed">
       <thead>
         <tr>
-          <Th>Round</Th>
-          {!hideScheme && <Th>Scheme</Th>}
-          <Th>State</Th>
+          <Th className="md:w-1/5">Round</Th>
+          {!hideScheme && <Th className="max-md:hidden! md:w-1/4">Scheme</Th>}
+          <Th className="md:w-1/5">State</Th>
           <Th>Results due</Th>
           <Th>Publication</Th>
           <Th numeric>Results sent</Th>
@@ -45,20 +45,27 @@ export function RoundTable({ caption, hideCaption = true, rounds, hideScheme }: 
               <Link href={`/rounds/${round.slug}`} className="text-link font-semibold">
                 {round.name}
               </Link>
+              {!hideScheme && (
+                <span className="block text-sm text-ink-soft md:hidden">{round.schemeName}</span>
+              )}
             </Th>
             {!hideScheme && (
-              <Td>
+              <Td className="max-md:hidden!">
                 <Link href={`/schemes/${round.schemeSlug}`} className="text-link">
                   {round.schemeName}
                 </Link>
               </Td>
             )}
-            <Td>
+            <Td label="State">
               <StateTag of="round" state={round.state} />
             </Td>
-            <Td className="figures">{formatDate(round.closesAt)}</Td>
-            <Td className="figures">{formatDate(round.publishedAt ?? round.publishAt)}</Td>
-            <Td numeric className="figures">
+            <Td label="Results due" className="figures">
+              {formatDate(round.closesAt)}
+            </Td>
+            <Td label="Publication" className="figures">
+              {formatDate(round.publishedAt ?? round.publishAt)}
+            </Td>
+            <Td label="Results sent" numeric className="figures">
               {round.submittedCount} of {round.participantCount}
             </Td>
           </tr>

@@ -29,12 +29,18 @@ const TEXTS: Record<CautionKind, { title: string; text: string }> = {
 export function Caution({ kind = 'handling', children }: CautionProps) {
   const { title, text } = TEXTS[kind];
   return (
-    <aside aria-label={title} className="max-w-prose border-y border-rule-strong py-2.5 text-sm">
-      <p>
-        <OpenTriangle className="mr-1.5" />
-        <strong>{title}.</strong> {text}
+    <aside
+      aria-label={title}
+      className="grid gap-x-6 gap-y-0.5 border-y border-rule-strong py-2.5 text-sm md:grid-cols-[12rem_1fr]"
+    >
+      <p className="flex items-baseline gap-x-1.5 font-semibold">
+        <OpenTriangle />
+        <span>{title}.</span>
       </p>
-      {children && <div className="mt-1.5">{children}</div>}
+      <div className="max-w-measure">
+        <p>{text}</p>
+        {children && <div className="mt-1.5">{children}</div>}
+      </div>
     </aside>
   );
 }

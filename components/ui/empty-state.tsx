@@ -7,7 +7,7 @@ export function EmptyState({ title, children, action }: EmptyStateProps) {
   return (
     <div className="border-y py-8">
       <p className="font-serif text-lg font-semibold">{title}</p>
-      {children && <div className="mt-1 max-w-prose text-ink-soft">{children}</div>}
+      {children && <div className="mt-1 max-w-measure text-ink-soft">{children}</div>}
       {action && <div className="mt-4 flex flex-wrap gap-2">{action}</div>}
     </div>
   );

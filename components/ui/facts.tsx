@@ -12,7 +12,7 @@ export function Facts({ items, columns = 1, className }: FactsProps) {
       {items.map((item, index) => (
         <div key={index} className="flex flex-wrap items-baseline justify-between gap-x-4 border-b py-1.5">
           <dt className="text-ink-soft">{item.label}</dt>
-          <dd className="text-right font-semibold tabular-nums wrap-anywhere">
+          <dd className="ml-auto text-right font-semibold tabular-nums wrap-anywhere">
             {item.value}
             {item.hint && <span className="block text-sm font-normal text-ink-soft">{item.hint}</span>}
           </dd>

@@ -36,7 +36,7 @@ export function Notice({ kind = 'info', title, children, className }: NoticeProp
         </strong>
         {title && <span className="font-semibold">{title}</span>}
       </p>
-      {children && <div className="mt-0.5 max-w-prose">{children}</div>}
+      {children && <div className="mt-0.5 max-w-measure">{children}</div>}
     </div>
   );
 }

@@ -13,11 +13,13 @@ export type PageHeaderProps = {
 export function PageHeader({ title, lead, actions, breadcrumb = [], tag }: PageHeaderProps) {
   return (
     <header className="flex flex-wrap items-end justify-between gap-x-8 gap-y-4">
-      <div className="min-w-0 max-w-prose">
+      <div className="min-w-0">
         {breadcrumb.length > 0 && <Breadcrumb crumbs={breadcrumb} />}
         <h1 className="wrap-anywhere">{title}</h1>
         {tag && <div className="mt-2">{tag}</div>}
-        {lead && <div className="mt-2 text-lg leading-snug text-ink-soft">{lead}</div>}
+        {lead && (
+          <div className="mt-2 max-w-measure text-lg leading-snug text-pretty text-ink-soft">{lead}</div>
+        )}
       </div>
       {actions && <div className="no-print flex flex-wrap gap-2">{actions}</div>}
     </header>
@@ -28,14 +30,16 @@ function Breadcrumb({ crumbs }: { crumbs: Crumb[] }) {
   return (
     <nav aria-label="You are in" className="no-print mb-1 text-sm">
       <ol className="flex flex-wrap gap-x-1.5">
-        {crumbs.map((crumb) => (
+        {crumbs.map((crumb, index) => (
           <li key={crumb.href} className="flex gap-x-1.5">
+            {index > 0 && (
+              <span aria-hidden="true" className="self-center text-ink-faint">
+                /
+              </span>
+            )}
             <Link href={crumb.href} className="text-link inline-flex min-h-6 items-center">
               {crumb.label}
             </Link>
-            <span aria-hidden="true" className="self-center text-ink-faint">
-              /
-            </span>
           </li>
         ))}
       </ol>

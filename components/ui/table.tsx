@@ -6,19 +6,36 @@ export type TableProps = ComponentProps<'table'> & {
   caption: ReactNode;
   hideCaption?: boolean;
   fullHeight?: boolean;
+  /** On phones each row becomes a block of lines; cells name their column by `label`. */
+  stacked?: boolean;
 };
 
 /** A table in a scroll container of its own: the header stays in view, and keys can scroll it. */
-export function Table({ caption, hideCaption, fullHeight, className, children, ...rest }: TableProps) {
+export function Table({
+  caption,
+  hideCaption,
+  fullHeight,
+  stacked,
+  className,
+  children,
+  ...rest
+}: TableProps) {
   const id = useId();
   return (
     <div
       role="region"
       aria-labelledby={id}
       tabIndex={0}
-      className={cx('overflow-auto print:max-h-none print:overflow-visible', !fullHeight && 'max-h-[85svh]')}
+      className={cx(
+        // Relative, so that text for screen readers in its cells cannot widen the page.
+        'scroll-hint relative overflow-auto print:max-h-none print:overflow-visible',
+        !fullHeight && (stacked ? 'sm:max-h-[85svh]' : 'max-h-[85svh]'),
+      )}
     >
-      <table {...rest} className={cx('w-full border-collapse text-left', className)}>
+      <table
+        {...rest}
+        className={cx('w-full border-collapse text-left', stacked && 'stacked-table', className)}
+      >
         <caption id={id} className={hideCaption ? 'sr-only' : 'pb-2 text-left font-semibold'}>
           {caption}
         </caption>
@@ -36,11 +53,11 @@ export function Th({ numeric, className, scope = 'col', ...rest }: ComponentProp
       {...rest}
       scope={scope}
       className={cx(
-        'px-3 py-1.5 align-bottom font-semibold first:pl-0 last:pr-0',
+        'px-3 py-1.5 first:pl-0 last:pr-0',
         // A border would scroll away under a sticky header; a shadow line moves with the cell.
         scope === 'col' &&
-          'sticky top-0 z-10 bg-paper text-sm text-ink-soft shadow-[inset_0_-1px_0_var(--rule-strong)]',
-        scope === 'row' && 'border-b font-normal',
+          'sticky top-0 z-10 bg-paper align-bottom text-sm font-semibold text-ink-soft shadow-[inset_0_-1px_0_var(--rule-strong)]',
+        scope === 'row' && 'border-b align-top font-normal',
         numeric && 'text-right',
         className,
       )}
@@ -48,10 +65,13 @@ export function Th({ numeric, className, scope = 'col', ...rest }: ComponentProp
   );
 }
 
-export function Td({ numeric, className, ...rest }: ComponentProps<'td'> & CellProps) {
+export type TdProps = ComponentProps<'td'> & CellProps & { label?: string };
+
+export function Td({ numeric, label, className, ...rest }: TdProps) {
   return (
     <td
       {...rest}
+      data-label={label}
       className={cx(
         'border-b px-3 py-1.5 align-top first:pl-0 last:pr-0',
         numeric && 'text-right',

@@ -3,8 +3,8 @@
 import Monitor from 'lucide-react/icons/monitor';
 import Moon from 'lucide-react/icons/moon';
 import Sun from 'lucide-react/icons/sun';
-import { useId, useState } from 'react';
-import { applyTheme } from './apply-theme';
+import { useId, useSyncExternalStore } from 'react';
+import { applyTheme, onThemeChange, shownTheme } from './apply-theme';
 import type { Theme } from './theme';
 
 export type ThemeSwitchProps = { initial: Theme };
@@ -16,13 +16,8 @@ const CHOICES = [
 ] as const;
 
 export function ThemeSwitch({ initial }: ThemeSwitchProps) {
-  const [theme, setTheme] = useState<Theme>(initial);
+  const theme = useSyncExternalStore(onThemeChange, shownTheme, () => initial);
   const name = useId();
-
-  function choose(next: Theme) {
-    setTheme(next);
-    applyTheme(next);
-  }
 
   return (
     <fieldset className="inline-flex">
@@ -38,7 +33,7 @@ export function ThemeSwitch({ initial }: ThemeSwitchProps) {
             name={name}
             value={choice}
             checked={theme === choice}
-            onChange={() => choose(choice)}
+            onChange={() => applyTheme(choice)}
             className="sr-only"
           />
           <span className="sr-only">{label}</span>

@@ -62,6 +62,7 @@ export function useDataTable(
     columns: definitions,
     data: rows,
     getRowId: (row) => row.id,
+    enableSortingRemoval: false,
     initialState: { sorting: sortBy ? [{ id: sortBy.key, desc: sortBy.descending ?? false }] : [] },
     getColumnCanGlobalFilter: () => true,
     globalFilterFn: (row, id, wanted) => {

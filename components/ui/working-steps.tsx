@@ -52,7 +52,7 @@ function Step({ step }: { step: WorkingStep }) {
   return (
     <li className="border-t pt-3">
       <div className="flex flex-wrap items-baseline justify-between gap-x-4">
-        <h3 className="text-base">{step.name}</h3>
+        <p className="font-serif font-semibold">{step.name}</p>
         <span className="text-sm text-ink-soft">{step.clause}</span>
       </div>
       <p className="symbol mt-1 wrap-anywhere">{step.formula}</p>

@@ -1,6 +1,6 @@
 'use client';
 
-import { useId, useState, type DragEvent } from 'react';
+import { useEffect, useEffectEvent, useId, useRef, useState, type DragEvent } from 'react';
 import { buttonStyle } from '@/components/ui/button-style';
 import { cx } from '@/components/ui/cx';
 
@@ -19,6 +19,19 @@ const ACCEPT = '.csv,.tsv,.txt,text/csv,text/tab-separated-values,text/plain';
 export function DropZone({ label, hint, choose, complaint, onFiles }: DropZoneProps) {
   const id = useId();
   const [isOver, setIsOver] = useState(false);
+  const field = useRef<HTMLInputElement>(null);
+
+  function takeChosen() {
+    const files = [...(field.current?.files ?? [])];
+    if (files.length === 0 || !field.current) return;
+    // Choosing the same file again after mending it must count as a change.
+    field.current.value = '';
+    onFiles(files);
+  }
+
+  // On a slow line a file may be chosen before the page listens.
+  const takeEarly = useEffectEvent(takeChosen);
+  useEffect(() => takeEarly(), []);
 
   function onDrop(event: DragEvent) {
     event.preventDefault();
@@ -42,7 +55,7 @@ export function DropZone({ label, hint, choose, complaint, onFiles }: DropZonePr
       )}
     >
       <p className="font-serif text-lg font-semibold">{label}</p>
-      <p id={`${id}-hint`} className="max-w-prose text-ink-soft">
+      <p id={`${id}-hint`} className="max-w-measure text-ink-soft">
         {hint}
       </p>
       <label
@@ -54,17 +67,13 @@ export function DropZone({ label, hint, choose, complaint, onFiles }: DropZonePr
       >
         {choose}
         <input
+          ref={field}
           id={id}
           type="file"
           accept={ACCEPT}
           aria-describedby={`${id}-hint`}
           className="sr-only"
-          onChange={(event) => {
-            const files = [...(event.target.files ?? [])];
-            // Choosing the same file again after mending it must count as a change.
-            event.target.value = '';
-            onFiles(files);
-          }}
+          onChange={takeChosen}
         />
       </label>
       <div aria-live="polite">{complaint && <p className="font-semibold text-action">{complaint}</p>}</div>

@@ -38,17 +38,24 @@ export function PreviewTable({ preview, caption }: PreviewTableProps) {
 }
 
 function Row({ row, columns }: { row: PreviewRow; columns: Preview['columns'] }) {
+  const isUnread = row.cells.length === 0;
   return (
     <>
-      <tr id={`line-${row.line}`} className="scroll-mt-16">
+      <tr>
         <Td numeric className="figures text-ink-soft">
           {row.line}
         </Td>
-        {columns.map((column, index) => (
-          <Cell key={column.key} cell={row.cells[index]} numeric={column.numeric} />
-        ))}
+        {isUnread ? (
+          <Td colSpan={columns.length}>
+            <Notes notes={row.notes} />
+          </Td>
+        ) : (
+          columns.map((column, index) => (
+            <Cell key={column.key} cell={row.cells[index]} numeric={column.numeric} />
+          ))
+        )}
       </tr>
-      {row.notes.length > 0 && (
+      {!isUnread && row.notes.length > 0 && (
         <tr>
           <Td />
           <Td colSpan={columns.length}>

@@ -101,7 +101,8 @@ function gatherNotes(problems: readonly Problem[], notices: readonly Notice[]) {
   const placed: { line: number; column: string | null; note: PreviewNote }[] = [];
   for (const { line, column, found, expected, message } of problems) {
     if (line === null) continue;
-    const text = column === null ? message : `Found ${found === '' ? 'nothing' : `"${found}"`}. ${expected}`;
+    const text =
+      column === null ? afterPlace(message) : `Found ${found === '' ? 'nothing' : `"${found}"`}. ${expected}`;
     placed.push({ line, column, note: { kind: 'problem', text } });
   }
   for (const { line, column, message } of notices) {
@@ -129,7 +130,8 @@ function groupByLine<T extends { line: number }>(entries: readonly T[]): Map<num
   return groups;
 }
 
-/** A notice in its place need not say the place again. */
+/** A note in its place need not say the place again. */
 function afterPlace(message: string): string {
-  return message.replace(/^Line \d+(, [a-z_]+)?: /, '');
+  const rest = message.replace(/^Line \d+(, [a-z_]+)?: /, '');
+  return rest.charAt(0).toUpperCase() + rest.slice(1);
 }

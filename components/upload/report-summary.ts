@@ -13,8 +13,8 @@ export function reportSummary(report: CheckReport): { title: string; text: strin
   ].filter(Boolean);
   const reading = how.length > 0 ? ` Read as ${how.join(', ')}.` : '';
   if (report.ok) {
-    const rows = formatCount(report.rowCount, 'row has', 'rows have');
-    return { title: `${rows} no problem.`, text: `Nothing is submitted yet.${reading}` };
+    const rows = formatCount(report.rowCount, 'row');
+    return { title: `${rows} checked, no problem.`, text: `Nothing is submitted yet.${reading}` };
   }
   const count = report.problems.length + report.unlistedProblems;
   return {

@@ -11,7 +11,7 @@ export function SendProgress({ progress, sending, waiting, onStop }: SendProgres
       <p role="status" className="font-semibold">
         {isSent ? waiting : sending}
       </p>
-      <div className="flex w-full max-w-prose items-center gap-3">
+      <div className="flex w-full max-w-measure items-center gap-3">
         <progress
           aria-label="Sent"
           value={isSent ? undefined : percent}

@@ -100,14 +100,13 @@ export function UploadFile({ address, kind, texts, onTaken, about }: UploadFileP
 type ChosenState = Exclude<UploadState, { step: 'waiting' }>;
 
 function FileLine({ state, onClear }: { state: ChosenState; onClear: () => void }) {
-  const isBusy = ['checking', 'submitting', 'submitted'].includes(state.step);
   return (
     <div className="flex flex-wrap items-center justify-between gap-x-4 gap-y-2 border-b pb-2">
       <p className="wrap-anywhere">
         <span className="font-semibold">{state.file.name}</span>{' '}
         <span className="text-ink-soft">{formatBytes(state.file.bytes.size)}</span>
       </p>
-      {!isBusy && (
+      {state.step === 'checked' && (
         <Button size="small" onClick={onClear}>
           Choose another file
         </Button>
@@ -120,7 +119,7 @@ function Report({ report, about }: { report: CheckReport } & Pick<UploadFileProp
   const { title, text } = reportSummary(report);
   return (
     <>
-      <Notice kind={report.ok ? 'done' : 'problem'} title={title}>
+      <Notice kind={report.ok ? 'info' : 'problem'} title={title}>
         {text}
         {report.ok && about?.(report)}
       </Notice>

@@ -7,3 +7,10 @@ export async function getInputsText(connection: Db, evaluationId: number): Promi
   if (!row) throw new Error(`evaluation ${evaluationId} is missing`);
   return row.inputs_json;
 }
+
+/** The plan an evaluation was made by, as it stood then. */
+export async function getSettingsText(connection: Db, evaluationId: number): Promise<string> {
+  const row = await connection('evaluations').where({ id: evaluationId }).first('settings_json');
+  if (!row) throw new Error(`evaluation ${evaluationId} is missing`);
+  return row.settings_json;
+}

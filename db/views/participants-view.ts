@@ -10,6 +10,7 @@ export interface Participant {
   town: string;
   participantCode: string;
   state: EnrolmentState;
+  reason: string;
   itemsReceivedAt: string | null;
   submittedAt: string | null;
   resultCount: number | null;
@@ -32,6 +33,7 @@ export async function listParticipants(connection: Db, roundId: number): Promise
       'laboratories.town',
       'enrolments.participant_code',
       'enrolments.state',
+      'enrolments.reason',
       'enrolments.items_received_at',
       'submissions.submitted_at',
       'submissions.result_count',

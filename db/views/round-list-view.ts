@@ -19,9 +19,11 @@ export async function listRounds(
     .where('enrolments.state', 'enrolled')
     .count('*')
     .as('participant_count');
+  // What a laboratory sent before it was withdrawn is kept but does not count.
   const submitted = connection('submissions')
+    .join('enrolments', 'enrolments.id', 'submissions.enrolment_id')
     .whereRaw('submissions.round_id = rounds.id')
-    .where('submissions.state', 'submitted')
+    .where({ 'submissions.state': 'submitted', 'enrolments.state': 'enrolled' })
     .count('*')
     .as('submitted_count');
   const query = connection('rounds')

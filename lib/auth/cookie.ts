@@ -1,9 +1,9 @@
 import 'server-only';
 import { decode, encode } from 'next-auth/jwt';
 import { publicAddress } from '@/lib/env';
+import { SESSION_HOURS } from '@/lib/rules/session';
 import { getSecrets } from '@/lib/secrets';
 
-export const SESSION_HOURS = 12;
 export const SESSION_SECONDS = SESSION_HOURS * 3_600;
 
 /** Only a site served by https may set the prefixed, secure cookie. */

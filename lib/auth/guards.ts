@@ -1,6 +1,7 @@
 import 'server-only';
 import { headers } from 'next/headers';
 import { notFound, redirect } from 'next/navigation';
+import { cache } from 'react';
 import { isAppError } from '@/lib/errors';
 import { laboratoriesOf, type Permission, type Subject } from '@/lib/rules/permissions';
 import type { Actor } from '@/lib/rules/roles';
@@ -28,11 +29,18 @@ export async function requirePermission(
   return authorise(await currentActor(), permission, subject, options);
 }
 
+/** A layout and its page ask the same thing at the same time; the refusal is one line in the log. */
+const authorisePage = cache(async (permission: Permission, laboratoryId: number | null) =>
+  authorise(await requireActor(), permission, { laboratoryId }),
+);
+
 /** For pages: leads to the sign-in page, or answers 404, which tells nothing of what is there. */
-export async function requirePageActor(permission: Permission, subject: Subject = {}): Promise<Actor> {
-  const actor = await requireActor();
+export async function requirePageActor(
+  permission: Permission,
+  subject: Pick<Subject, 'laboratoryId'> = {},
+): Promise<Actor> {
   try {
-    return await authorise(actor, permission, subject);
+    return await authorisePage(permission, subject.laboratoryId ?? null);
   } catch (error) {
     if (isAppError(error)) notFound();
     throw error;

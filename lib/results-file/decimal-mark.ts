@@ -44,7 +44,8 @@ export function decideDecimalMark(table: Table, findings: Findings): DecidedMark
       if (evidence === null) continue;
       first[evidence.mark] ??= evidence;
       if (evidence.mark === ',' && !evidence.isGroupLike) isCommaCertain = true;
-      if (first['.'] && first[',']) return refuseMixed(first['.'], first[','], findings);
+      const other = first[evidence.mark === ',' ? '.' : ','];
+      if (other !== undefined) return refuseMixed(other, evidence, findings);
     }
   }
   const comma = first[','];
@@ -63,8 +64,7 @@ export function decideDecimalMark(table: Table, findings: Findings): DecidedMark
 
 const MARK_WORDS: Record<DecimalMark, string> = { '.': 'a decimal point', ',': 'a decimal comma' };
 
-function refuseMixed(point: Evidence, comma: Evidence, findings: Findings): DecidedMark {
-  const [earlier, later] = comma.line < point.line ? [comma, point] : [point, comma];
+function refuseMixed(earlier: Evidence, later: Evidence, findings: Findings): DecidedMark {
   findings.problem({
     code: 'mixed-decimal-marks',
     line: later.line,

@@ -1,6 +1,7 @@
 import { listNames } from './header';
 import type { CodeIndex } from './code-index';
 import type { IndexedMeasurand, PlanIndex } from './plan-index';
+import { MAX_LABORATORY } from './limits';
 import { quoteFound } from './quote-found';
 import type { RowCells } from './row-cells';
 import type { FileKind } from './result-types';
@@ -38,6 +39,11 @@ function findEntry(row: RowCells, roll: Roll, kind: FileKind): RollEntry | null 
       'Write the name or the code of the laboratory.',
       'found an empty cell',
     );
+    return null;
+  }
+  if (text.length > MAX_LABORATORY) {
+    const words = `found a name of ${text.length} characters`;
+    row.refuse('laboratory', 'cell-too-long', `A name has at most ${MAX_LABORATORY}.`, words);
     return null;
   }
   return roll.entryOf(text);

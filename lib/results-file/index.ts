@@ -18,6 +18,6 @@ export type {
   ResultKind,
   TextEncodingName,
 } from './result-types';
-export { resultsTemplate } from './template';
+export { resultsTemplate, wholeRoundTemplate } from './template';
 export type { Table, TableRow } from './table';
 export { writeCsv, type CsvColumn, type CsvOptions, type CsvRow } from './write-csv';

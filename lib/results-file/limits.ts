@@ -4,6 +4,8 @@ export const MAX_BYTES = 20 * 1024 * 1024;
 export const MAX_ROWS = 100_000;
 /** Characters in one cell. */
 export const MAX_CELL = 2_000;
+/** Characters in the name of a laboratory. */
+export const MAX_LABORATORY = 120;
 /** Characters in one physical line: far more than the named columns can fill, far less than would fill the memory. */
 export const MAX_LINE = 200_000;
 /** Physical lines up to the last one with content: quoted line breaks and empty rows among them. */

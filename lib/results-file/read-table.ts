@@ -75,7 +75,7 @@ function findSeparator(text: string): Separator {
     if (told === null && HAS_CONTENT.test(line)) return chooseSeparator(line);
     start = end + 1;
   }
-  return ',';
+  return SEPARATORS.find((candidate) => text.includes(candidate)) ?? ',';
 }
 
 const isEmptyRow = (cells: readonly string[]): boolean => cells.every((cell) => cell.trim() === '');
@@ -110,6 +110,14 @@ class RowGatherer {
   }
 
   finish(): Table {
+    if (this.headerLine === null) {
+      this.findings.problem({
+        code: 'empty-file',
+        found: '',
+        foundWords: 'the file holds nothing but empty rows',
+        expected: 'Write a header line and one row for each result.',
+      });
+    }
     if (this.table.usable && this.rowCount === 0) {
       this.findings.problem({
         code: 'no-rows',

@@ -46,7 +46,7 @@ export function can(actor: Actor | null, permission: Permission, subject: Subjec
   if (!actor) return false;
   const roles: readonly Role[] = ALLOWED[permission];
   const isOwn = permission.startsWith('own:');
-  if (isOwn && subject.laboratoryId == null) return false;
+  if (isOwn && (subject.laboratoryId ?? null) === null) return false;
   const held = actor.memberships.some(
     (membership) =>
       roles.includes(membership.role) && (!isOwn || membership.laboratoryId === subject.laboratoryId),

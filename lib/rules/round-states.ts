@@ -70,9 +70,8 @@ export function stepBlockers(step: RoundStep, facts: RoundFacts, now: string): B
   if (step === 'close')
     add(facts.submittedCount === 0, 'No laboratory has sent results yet.', '/participants');
   if (step === 'evaluate') {
-    for (const name of facts.measurandsWithoutResult) {
-      add(true, `${name} has no numeric result, so there is nothing to evaluate for it.`, '/results');
-    }
+    const isEmpty = facts.measurandsWithoutResult.length === facts.measurandCount;
+    add(isEmpty, 'No measurand has a numeric result, so there is nothing to evaluate.', '/results');
   }
   if (step === 'publish') {
     add(

@@ -4,7 +4,19 @@ export const NAME_LENGTH = 120;
 export const TEXT_LENGTH = 4_000;
 const CODE_LENGTH = 20;
 
+/** Line breaks, control codes and marks that turn the direction of writing: in a name they forge what stands around it. */
+const NOT_IN_A_LINE = /[\p{Cc}\p{Zl}\p{Zp}\u202a-\u202e\u2066-\u2069]/u;
+
+/** A text of one line, such as a name: it goes into subjects, headings and letters. */
 export function requiredText(what: string, max = NAME_LENGTH) {
+  return requiredNote(what, max).refine(
+    (text) => !NOT_IN_A_LINE.test(text),
+    `Write ${what} in one line, without characters that cannot be seen.`,
+  );
+}
+
+/** A text that may have several lines, such as a reason. */
+export function requiredNote(what: string, max: number) {
   return z
     .string({ error: `Enter ${what}.` })
     .trim()

@@ -36,7 +36,10 @@ export const roundSchema = z
     closesAt: utcDateTime('the closing date'),
     publishAt: utcDateTime('the publication date'),
     instructions: optionalText(),
-    fee: optionalNumber('the fee', { min: 0, max: 1_000_000 }),
+    fee: optionalNumber('the fee', { min: 0, max: 1_000_000 }).refine(
+      (fee) => fee === null || Number(fee.toFixed(2)) === fee,
+      'Enter the fee with at most two decimals.',
+    ),
     feeCurrency: z.enum(CURRENCIES).default('EUR'),
   })
   .superRefine((round, context) => {

@@ -3,6 +3,7 @@ import { addAuditEntry } from '@/db/audit-store';
 import { db, type Db } from '@/db/connection';
 import { findLaboratory } from '@/db/laboratory-store';
 import { countOtherHolders, listMembershipsOfUser } from '@/db/membership-store';
+import { countLinksSince } from '@/db/one-time-link-store';
 import { inTransaction } from '@/db/transaction';
 import { findUser, type User } from '@/db/user-store';
 import { listColleagues, type ColleagueLine } from '@/db/views/people-view';
@@ -11,6 +12,10 @@ import type { Actor } from '@/lib/rules/roles';
 import type { ColleagueRoleInput, InviteColleagueInput } from '@/lib/schemas/people';
 import { giveRoles, takeRole } from './give-roles';
 import { mailLink } from './link-mail';
+import { requireLaboratory } from './own-laboratory';
+
+const LINKS_AN_HOUR = 3;
+const HOUR_MS = 3_600_000;
 
 // Every function here works on the laboratory the actor works for at the moment; an id from outside never names it.
 
@@ -55,6 +60,14 @@ export async function inviteColleagueAgain(actor: Actor, userId: number): Promis
         'This person has an account. A new password is asked for on the sign-in page.',
       );
     }
+    const since = new Date(Date.now() - HOUR_MS).toISOString();
+    const sent = await countLinksSince(trx, { userId: person.id, purpose: 'welcome', since });
+    if (sent >= LINKS_AN_HOUR) {
+      throw new AppError(
+        'too-many',
+        `${LINKS_AN_HOUR} invitations went out within an hour. Try again later.`,
+      );
+    }
     const laboratory = await findLaboratory(trx, laboratoryId);
     await mailLink(trx, person, 'welcome', laboratory?.name);
     await addAuditEntry(trx, {
@@ -74,9 +87,4 @@ async function getColleague(trx: Db, laboratoryId: number, userId: number): Prom
     : null;
   if (!person) throw notFound('The person');
   return person;
-}
-
-function requireLaboratory(actor: Actor): number {
-  if (actor.laboratoryId === null) throw new AppError('forbidden', 'You belong to no laboratory.');
-  return actor.laboratoryId;
 }

@@ -105,7 +105,7 @@ export async function confirmReceipt(actor: Actor, slug: string, laboratoryId: n
   await inTransaction(db(), async (trx) => {
     const round = await findRound(trx, slug);
     const enrolment = round ? await findEnrolment(trx, round.id, laboratoryId) : null;
-    if (!round || enrolment?.state !== 'enrolled') throw notFound('The round');
+    if (!round || round.isPast || enrolment?.state !== 'enrolled') throw notFound('The round');
     if (round.state !== 'open') {
       throw new AppError(
         'conflict',

@@ -20,13 +20,22 @@ function groupByCode(results: readonly RoundResult[]): Map<string, RoundResult[]
   return groups;
 }
 
-function standardUncertainty(replicates: readonly RoundResult[]): number | null {
-  const stated = replicates.flatMap((result) =>
-    result.expandedUncertainty !== null && result.coverageFactor !== null
-      ? [result.expandedUncertainty / result.coverageFactor]
-      : [],
-  );
-  return stated.length > 0 ? Math.max(...stated) : null;
+/** The largest standard uncertainty that was stated, with its expanded one as stated. */
+function statedUncertainty(
+  replicates: readonly RoundResult[],
+): Pick<MeasurandResult, 'standardUncertainty' | 'expandedUncertainty'> {
+  let largest: { standardUncertainty: number | null; expandedUncertainty: number | null } = {
+    standardUncertainty: null,
+    expandedUncertainty: null,
+  };
+  for (const { expandedUncertainty, coverageFactor } of replicates) {
+    if (expandedUncertainty === null || coverageFactor === null) continue;
+    const standardUncertainty = expandedUncertainty / coverageFactor;
+    if (standardUncertainty > (largest.standardUncertainty ?? -1)) {
+      largest = { standardUncertainty, expandedUncertainty };
+    }
+  }
+  return largest;
 }
 
 /**
@@ -49,7 +58,7 @@ export function figuresOf(results: readonly RoundResult[]): Figures {
       figures.results.push({
         participant,
         value: values.length === 1 && values[0] !== undefined ? values[0] : mean(values),
-        standardUncertainty: standardUncertainty(replicates),
+        ...statedUncertainty(replicates),
       });
     }
   }

@@ -8,8 +8,10 @@ import {
   type Evaluation,
   type SignOff,
 } from '@/db/evaluation-store';
-import { listRoundMeasurands, type RoundMeasurand } from '@/db/round-measurand-store';
+import type { RoundMeasurand } from '@/db/round-measurand-store';
 import { findRound, type Round } from '@/db/round-store';
+import { getSettingsText } from '@/db/views/evaluation-inputs-view';
+import { findUserName, listRoleHolders } from '@/db/views/round-people-view';
 import { notFound } from '@/lib/errors';
 import { can, laboratoriesOf } from '@/lib/rules/permissions';
 import type { Actor } from '@/lib/rules/roles';
@@ -27,11 +29,14 @@ export interface RoundEvaluation {
   measurands: EvaluatedPlan[];
 }
 
-/** The newest evaluation of a round with every measurand, or null before the first. */
+/**
+ * The newest evaluation of a round with every measurand, or null before the first. Names, decimals and limits are those
+ * it was made with: what the scheme says today must not change a report that was signed.
+ */
 export async function findRoundEvaluation(connection: Db, round: Round): Promise<RoundEvaluation | null> {
   const evaluation = await findLatestEvaluation(connection, round.id);
   if (!evaluation) return null;
-  const plans = await listRoundMeasurands(connection, round.id);
+  const plans = JSON.parse(await getSettingsText(connection, evaluation.id)) as RoundMeasurand[];
   const bodies = new Map(
     (await listEvaluatedMeasurands(connection, evaluation.id)).map((entry) => [
       entry.roundMeasurandId,
@@ -64,4 +69,23 @@ export async function getVisibleEvaluation(actor: Actor, slug: string): Promise<
   const found = await findRoundEvaluation(db(), round);
   if (!found) throw notFound('The evaluation');
   return { ...found, ownCodes };
+}
+
+export interface PreparedEvaluation extends RoundEvaluation {
+  preparedByName: string | null;
+}
+
+/** The newest evaluation as the provider's staff sees it; null before the first. */
+export async function getPreparedEvaluation(slug: string): Promise<PreparedEvaluation | null> {
+  const round = await findRound(db(), slug);
+  if (!round) throw notFound('The round');
+  const found = await findRoundEvaluation(db(), round);
+  if (!found) return null;
+  return { ...found, preparedByName: await findUserName(db(), found.evaluation.createdBy) };
+}
+
+/** The people who may sign a version: reviewers who did not prepare it. */
+export async function listSigners(evaluation: Pick<Evaluation, 'createdBy'>): Promise<string[]> {
+  const reviewers = await listRoleHolders(db(), 'reviewer');
+  return reviewers.filter(({ id }) => id !== evaluation.createdBy).map(({ name }) => name);
 }

@@ -14,7 +14,7 @@ export async function mailReceipt(
   laboratoryId: number,
   receipt: Receipt,
 ): Promise<void> {
-  const recipients = await listRoundRecipients(trx, round.id, laboratoryId);
+  const recipients = await listRoundRecipients(trx, round.id, { states: ['enrolled'], laboratoryId });
   for (const recipient of recipients) {
     await addMail(trx, {
       dedupeKey: `receipt-${receipt.receiptCode}-${recipient.userId}`,

@@ -1,9 +1,8 @@
 import 'server-only';
 import { db } from '@/db/connection';
-import { findEnrolment } from '@/db/enrolment-store';
-import { findRound } from '@/db/round-store';
-import { notFound } from '@/lib/errors';
-import { resultsTemplate } from '@/lib/results-file';
+import { resultsTemplate, wholeRoundTemplate } from '@/lib/results-file';
+import { listParticipants } from '@/db/views/participants-view';
+import { findOwnEnrolment } from './open-enrolment';
 import { getRound } from './round-plan';
 import { getResultsPlan } from './results-plan';
 
@@ -15,13 +14,14 @@ export async function laboratoryTemplate(
   laboratoryId: number,
   separator: Separator,
 ): Promise<string> {
-  const round = await findRound(db(), slug);
-  const enrolment = round ? await findEnrolment(db(), round.id, laboratoryId) : null;
-  if (!round || !enrolment || round.state === 'draft') throw notFound('The round');
+  const { round } = await findOwnEnrolment(db(), slug, laboratoryId);
   return resultsTemplate(await getResultsPlan(db(), round), { separator });
 }
 
-export async function wholeRoundTemplate(slug: string, separator: Separator): Promise<string> {
+/** The template of a whole round names its enrolled laboratories: ask for `round:see-key` first. */
+export async function roundTemplate(slug: string, separator: Separator): Promise<string> {
   const round = await getRound(slug);
-  return resultsTemplate(await getResultsPlan(db(), round, []), { separator });
+  const enrolled = (await listParticipants(db(), round.id)).filter((entry) => entry.state === 'enrolled');
+  const laboratories = enrolled.map((entry) => ({ id: entry.laboratoryId, name: entry.laboratoryName }));
+  return wholeRoundTemplate(await getResultsPlan(db(), round, laboratories), { separator });
 }

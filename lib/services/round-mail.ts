@@ -1,12 +1,14 @@
 import 'server-only';
+import { randomBytes } from 'node:crypto';
 import type { Db } from '@/db/connection';
+import type { EnrolmentState } from '@/db/enrolment-store';
 import { addMail } from '@/db/outbox-store';
 import type { Round } from '@/db/round-store';
 import { listRoundRecipients } from '@/db/views/recipients-view';
 import { publicAddress } from '@/lib/env';
 import { formatDateTime } from '@/lib/format';
 
-type Occasion = 'invited' | 'opened' | 'cancelled' | 'published';
+type Occasion = 'invited' | 'opened' | 'moved' | 'cancelled' | 'published';
 
 function wording(round: Round, occasion: Occasion, reason: string): { subject: string; lines: string[] } {
   const address = `${publicAddress()}/laboratory/rounds/${round.slug}`;
@@ -27,6 +29,13 @@ function wording(round: Round, occasion: Occasion, reason: string): { subject: s
         'Handle test items by their label, the safety data sheet and your own procedures.',
       ],
     },
+    moved: {
+      subject: `New closing date of ${round.name}`,
+      lines: [
+        `Results of ${round.name} are now taken until ${formatDateTime(round.closesAt)}.`,
+        `The round: ${address}`,
+      ],
+    },
     cancelled: {
       subject: `${round.name} is cancelled`,
       lines: [`${round.name} is cancelled. Reason given: ${reason}`, `The round: ${address}`],
@@ -42,6 +51,11 @@ function wording(round: Round, occasion: Occasion, reason: string): { subject: s
   return texts[occasion];
 }
 
+/** Scores are for those who took part; everything before also concerns those who have not answered yet. */
+function statesFor(occasion: Occasion): readonly EnrolmentState[] {
+  return occasion === 'published' ? ['enrolled'] : ['invited', 'enrolled'];
+}
+
 /** Puts one message for each person of each participating laboratory, or of one of them, into the outbox. */
 export async function mailParticipants(
   trx: Db,
@@ -51,10 +65,12 @@ export async function mailParticipants(
   laboratoryId?: number,
 ): Promise<void> {
   const { subject, lines } = wording(round, occasion, reason);
-  const recipients = await listRoundRecipients(trx, round.id, laboratoryId);
+  const recipients = await listRoundRecipients(trx, round.id, { states: statesFor(occasion), laboratoryId });
+  // A date can move more than once, and back; everything else happens once.
+  const which = occasion === 'moved' ? `${occasion}-${randomBytes(8).toString('hex')}` : occasion;
   for (const recipient of recipients) {
     await addMail(trx, {
-      dedupeKey: `round-${round.id}-${occasion}-${recipient.laboratoryId}-${recipient.userId}`,
+      dedupeKey: `round-${round.id}-${which}-${recipient.laboratoryId}-${recipient.userId}`,
       to: recipient.email,
       subject,
       body: [`Dear ${recipient.name},`, ...lines, `For ${recipient.laboratoryName}.`].join('\n\n'),

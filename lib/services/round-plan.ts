@@ -25,6 +25,7 @@ import { roundStateWords } from '@/lib/rules/round-states';
 import type { RoundInput, RoundMeasurandInput, TestItemInput } from '@/lib/schemas/rounds';
 import { freeSlug, slugify } from '@/lib/slug';
 import { massFractionPerUnit } from '@/lib/units';
+import { mailParticipants } from './round-mail';
 
 /** Names that stand for pages below /rounds. */
 const RESERVED = ['new'];
@@ -104,10 +105,21 @@ export async function changeRound(actor: Actor, slug: string, input: RoundInput)
       );
     }
     const { closesAt, publishAt, instructions } = input;
-    const change = round.state === 'draft' ? input : { closesAt, publishAt, instructions };
-    await updateRoundPlan(trx, round.id, change);
+    const isDraft = round.state === 'draft';
+    if (!isDraft) requireOrder(round, closesAt);
+    await updateRoundPlan(trx, round.id, isDraft ? input : { closesAt, publishAt, instructions });
     const detail = `closes ${round.closesAt} -> ${closesAt}, publication ${round.publishAt} -> ${publishAt}`;
     await addAuditEntry(trx, { userId: actor.userId, roundId: round.id, action: 'round.changed', detail });
+    const isMoved = !isDraft && !round.isPast && closesAt !== round.closesAt;
+    if (isMoved) await mailParticipants(trx, { ...round, closesAt }, 'moved');
+  });
+}
+
+/** The dates that stay are those that are stored, whatever the form says of them. */
+function requireOrder(round: Round, closesAt: string): void {
+  if (closesAt >= round.dispatchAt) return;
+  throw new AppError('invalid', 'Nothing was saved.', {
+    fieldErrors: { closesAt: 'The close must not be before the dispatch.' },
   });
 }
 

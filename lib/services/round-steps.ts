@@ -48,7 +48,13 @@ export async function closeRound(actor: Actor, slug: string): Promise<void> {
   await inTransaction(db(), async (trx) => {
     const round = await requireStep(trx, slug, 'close');
     await applyStep(trx, round, 'close', { closedAt: new Date().toISOString() });
-    await addAuditEntry(trx, { userId: actor.userId, roundId: round.id, action: 'round.closed' });
+    const { submittedCount, participantCount } = await getRoundFacts(trx, round);
+    await addAuditEntry(trx, {
+      userId: actor.userId,
+      roundId: round.id,
+      action: 'round.closed',
+      detail: `${submittedCount} of ${participantCount} had sent results; the closing date was ${round.closesAt}`,
+    });
   });
 }
 
@@ -62,7 +68,7 @@ export async function cancelRound(actor: Actor, slug: string, reason: string): P
       action: 'round.cancelled',
       detail: reason,
     });
-    if (!round.isPast && round.state !== 'draft') await mailParticipants(trx, round, 'cancelled', reason);
+    if (!round.isPast) await mailParticipants(trx, round, 'cancelled', reason);
   });
 }
 

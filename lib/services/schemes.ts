@@ -1,6 +1,6 @@
 import 'server-only';
 import { addAuditEntry } from '@/db/audit-store';
-import { db } from '@/db/connection';
+import { db, type Db } from '@/db/connection';
 import {
   createMeasurand,
   isMeasurandInUse,
@@ -21,17 +21,18 @@ const RESERVED = ['new'];
 export type { Measurand } from '@/db/measurand-store';
 export type { Scheme } from '@/db/scheme-store';
 
-export async function getScheme(slug: string): Promise<Scheme> {
-  const scheme = await findScheme(db(), slug);
+export async function getScheme(slug: string, connection: Db = db()): Promise<Scheme> {
+  const scheme = await findScheme(connection, slug);
   if (!scheme) throw notFound('The scheme');
   return scheme;
 }
 
 export async function getSchemeWithMeasurands(
   slug: string,
+  connection: Db = db(),
 ): Promise<{ scheme: Scheme; measurands: Measurand[] }> {
-  const scheme = await getScheme(slug);
-  return { scheme, measurands: await listMeasurands(db(), scheme.id) };
+  const scheme = await getScheme(slug, connection);
+  return { scheme, measurands: await listMeasurands(connection, scheme.id) };
 }
 
 export async function addScheme(actor: Actor, input: SchemeInput): Promise<{ slug: string }> {
@@ -45,8 +46,8 @@ export async function addScheme(actor: Actor, input: SchemeInput): Promise<{ slu
 }
 
 export async function changeScheme(actor: Actor, slug: string, input: SchemeInput): Promise<void> {
-  const scheme = await getScheme(slug);
   await inTransaction(db(), async (trx) => {
+    const scheme = await getScheme(slug, trx);
     await updateScheme(trx, scheme.id, input);
     await addAuditEntry(trx, { userId: actor.userId, action: 'scheme.changed', detail: input.name });
   });
@@ -64,9 +65,9 @@ function refuseTakenCode(measurands: readonly Measurand[], code: string, ownId: 
 }
 
 export async function addMeasurand(actor: Actor, schemeSlug: string, input: MeasurandInput): Promise<void> {
-  const { scheme, measurands } = await getSchemeWithMeasurands(schemeSlug);
-  refuseTakenCode(measurands, input.code, null);
   await inTransaction(db(), async (trx) => {
+    const { scheme, measurands } = await getSchemeWithMeasurands(schemeSlug, trx);
+    refuseTakenCode(measurands, input.code, null);
     await createMeasurand(trx, { ...input, schemeId: scheme.id });
     await addAuditEntry(trx, {
       userId: actor.userId,
@@ -82,11 +83,11 @@ export async function changeMeasurand(
   measurandId: number,
   input: MeasurandInput,
 ): Promise<void> {
-  const { scheme, measurands } = await getSchemeWithMeasurands(schemeSlug);
-  const current = measurands.find((entry) => entry.id === measurandId);
-  if (!current) throw notFound('The measurand');
-  refuseTakenCode(measurands, input.code, measurandId);
   await inTransaction(db(), async (trx) => {
+    const { scheme, measurands } = await getSchemeWithMeasurands(schemeSlug, trx);
+    const current = measurands.find((entry) => entry.id === measurandId);
+    if (!current) throw notFound('The measurand');
+    refuseTakenCode(measurands, input.code, measurandId);
     const isFixed = await isMeasurandInUse(trx, measurandId);
     if (isFixed && (current.code !== input.code || current.unit !== input.unit)) {
       throw new AppError(

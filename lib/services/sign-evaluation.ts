@@ -1,7 +1,7 @@
 import 'server-only';
 import { addAuditEntry } from '@/db/audit-store';
 import { db, type Db } from '@/db/connection';
-import { createSignOff, findLatestEvaluation, type Evaluation } from '@/db/evaluation-store';
+import { createSignOff, findLatestEvaluation, listSignOffs, type Evaluation } from '@/db/evaluation-store';
 import { findRound, type Round } from '@/db/round-store';
 import { inTransaction } from '@/db/transaction';
 import { AppError, notFound } from '@/lib/errors';
@@ -47,6 +47,10 @@ export async function signEvaluation(
 ): Promise<void> {
   await inTransaction(db(), async (trx) => {
     const { round, evaluation, userId } = await requireSigner(trx, actor, slug, version);
+    const signed = await listSignOffs(trx, evaluation.id);
+    if (signed.some((entry) => entry.userId === userId)) {
+      throw new AppError('conflict', `You have signed version ${version} already.`);
+    }
     await createSignOff(trx, { evaluationId: evaluation.id, userId, decision: 'signed', comment });
     await addAuditEntry(trx, {
       userId,

@@ -13,11 +13,12 @@ import { inTransaction } from '@/db/transaction';
 import { findPasswordHash, findUserByEmail, type User } from '@/db/user-store';
 import { AppError } from '@/lib/errors';
 import { formatTime } from '@/lib/format';
+import { SESSION_HOURS } from '@/lib/rules/session';
+import { EMAIL_LENGTH, PASSWORD_MAX } from '@/lib/schemas/sign-in';
 import { isPassword } from './password-hash';
 
 export const MAX_FAILURES = 10;
 export const FAILURE_MINUTES = 15;
-const SESSION_HOURS = 12;
 const KEPT_DAYS = 30;
 
 const MINUTE_MS = 60_000;
@@ -32,16 +33,17 @@ export interface SignedIn {
 /** Checks an e-mail and password and begins a session. One answer for every reason of failure. */
 export async function signIn(credentials: { email: string; password: string }): Promise<SignedIn> {
   const email = credentials.email.trim().toLowerCase();
+  if (!canBeSomeones(email, credentials.password)) {
+    await logFailure('', null, 'no e-mail or password that anyone can have');
+    throw wrongCredentials();
+  }
   const attemptId = await claimAttempt(email);
   const user = await findUserByEmail(db(), email);
   const passwordHash = user && !user.isDisabled ? await findPasswordHash(db(), user.id) : null;
   const isRight = await isPassword(passwordHash, credentials.password);
   if (!user || !isRight) {
     await logFailure(email, user, 'wrong e-mail or password');
-    throw new AppError(
-      'invalid',
-      'The e-mail or the password is not right. Check both, or ask for a new password.',
-    );
+    throw wrongCredentials();
   }
   return inTransaction(db(), async (trx) => {
     await markAttemptSucceeded(trx, attemptId);
@@ -49,6 +51,20 @@ export async function signIn(credentials: { email: string; password: string }): 
     await addAuditEntry(trx, { userId: user.id, action: 'sign-in' });
     return { userId: user.id, sessionId };
   });
+}
+
+const LIKE_AN_EMAIL = /^[^\s@]+@[^\s@]+$/;
+
+/** What no one can sign in with is not kept among the attempts: it may be endless, or a password in the wrong field. */
+function canBeSomeones(email: string, password: string): boolean {
+  return LIKE_AN_EMAIL.test(email) && email.length <= EMAIL_LENGTH && password.length <= PASSWORD_MAX;
+}
+
+function wrongCredentials(): AppError {
+  return new AppError(
+    'invalid',
+    'The e-mail or the password is not right. Check both, or ask for a new password.',
+  );
 }
 
 /** Begins a session in a running transaction; the caller has made sure who the person is. */
@@ -83,12 +99,11 @@ async function claimAttempt(email: string): Promise<number> {
   );
 }
 
-/** What was typed as an e-mail is logged only if it looks like one: it may be a password in the wrong field. */
 async function logFailure(email: string, user: User | null, reason: string): Promise<void> {
   await addAuditEntry(db(), {
     userId: user?.id,
     action: 'sign-in',
     outcome: 'refused',
-    detail: /^[^\s@]+@[^\s@]+$/.test(email) ? `${reason}: ${email}` : reason,
+    detail: email ? `${reason}: ${email}` : reason,
   });
 }

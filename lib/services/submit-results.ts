@@ -2,8 +2,8 @@ import 'server-only';
 import { createHash } from 'node:crypto';
 import { addAuditEntry } from '@/db/audit-store';
 import { db, type Db } from '@/db/connection';
-import { findEnrolment, type Enrolment } from '@/db/enrolment-store';
-import { findRound, type Round } from '@/db/round-store';
+import type { Enrolment } from '@/db/enrolment-store';
+import type { Round } from '@/db/round-store';
 import {
   createResults,
   createSubmission,
@@ -13,16 +13,16 @@ import {
   type Channel,
 } from '@/db/submission-store';
 import { inTransaction } from '@/db/transaction';
-import { AppError, notFound } from '@/lib/errors';
-import { formatDateTime } from '@/lib/format';
+import { AppError } from '@/lib/errors';
 import { readResultsFile, type ReadFile } from '@/lib/results-file';
 import type { Actor } from '@/lib/rules/roles';
-import { roundStateWords } from '@/lib/rules/round-states';
 import type { UploadedFile } from '@/lib/upload-body';
+import { findOwnEnrolment, requireOpenEnrolment } from './open-enrolment';
 import { mailReceipt } from './receipt-mail';
 import { drawReceiptCode } from './receipt-code';
 import { getResultsPlan } from './results-plan';
 import { resultFromRow } from './submission-rows';
+import { todayAnywhere } from './today-anywhere';
 
 export interface Receipt {
   receiptCode: string;
@@ -38,27 +38,6 @@ export function sha256Of(bytes: Uint8Array): string {
   return createHash('sha256').update(bytes).digest('hex');
 }
 
-/** The open round and the laboratory's own enrolment in it; 404 for a round it has no part in. */
-async function requireOpenEnrolment(
-  connection: Db,
-  slug: string,
-  laboratoryId: number,
-): Promise<{ round: Round; enrolment: Enrolment }> {
-  const round = await findRound(connection, slug);
-  const enrolment = round ? await findEnrolment(connection, round.id, laboratoryId) : null;
-  if (!round || !enrolment || round.state === 'draft') throw notFound('The round');
-  if (round.state !== 'open') {
-    throw new AppError('conflict', `${round.name} takes no results: it is ${roundStateWords(round.state)}.`);
-  }
-  if (!round.isPast && round.closesAt <= new Date().toISOString()) {
-    throw new AppError('conflict', `${round.name} took results until ${formatDateTime(round.closesAt)}.`);
-  }
-  if (enrolment.state !== 'enrolled') {
-    throw new AppError('conflict', `Your laboratory is ${enrolment.state}, not enrolled, in ${round.name}.`);
-  }
-  return { round, enrolment };
-}
-
 interface FileReading {
   round: Round;
   enrolment: Enrolment;
@@ -66,26 +45,29 @@ interface FileReading {
   sha256: string;
 }
 
-/** Reads a laboratory's file against the plan; a refusal leaves a line in the log and nothing else. */
+/** Reads a laboratory's file against the plan; a refusal, of the file or of the time, leaves a line in the log and nothing else. */
 async function readAgainstPlan(
   actor: Actor,
   slug: string,
   laboratoryId: number,
   file: UploadedFile,
 ): Promise<FileReading> {
-  const { round, enrolment } = await requireOpenEnrolment(db(), slug, laboratoryId);
-  const today = new Date().toISOString().slice(0, 10);
-  const plan = await getResultsPlan(db(), round);
-  const report = readResultsFile(file.bytes, plan, { kind: 'laboratory', today });
+  const { round, enrolment, whyNot } = await findOwnEnrolment(db(), slug, laboratoryId);
   const sha256 = sha256Of(file.bytes);
-  if (!report.ok) {
-    await addAuditEntry(db(), {
+  const noteRefusal = (reason: string) =>
+    addAuditEntry(db(), {
       ...whoAndWhere(actor, laboratoryId, round),
       action: 'results.refused',
       outcome: 'refused',
-      detail: `${report.problems.length + report.unlistedProblems} problems, SHA-256 ${sha256}`,
+      detail: `${reason}, SHA-256 ${sha256}`,
     });
+  if (whyNot !== null) {
+    await noteRefusal(whyNot);
+    throw new AppError('conflict', whyNot);
   }
+  const plan = await getResultsPlan(db(), round);
+  const report = readResultsFile(file.bytes, plan, { kind: 'laboratory', today: todayAnywhere() });
+  if (!report.ok) await noteRefusal(`${report.problems.length + report.unlistedProblems} problems`);
   return { round, enrolment, report, sha256 };
 }
 

@@ -1,6 +1,12 @@
 import 'server-only';
 import { randomInt } from 'node:crypto';
-import { createApiToken, listApiTokens, revokeApiToken, type ApiToken } from '@/db/api-token-store';
+import {
+  countTokensInForce,
+  createApiToken,
+  listApiTokens,
+  revokeApiToken,
+  type ApiToken,
+} from '@/db/api-token-store';
 import { addAuditEntry } from '@/db/audit-store';
 import { db } from '@/db/connection';
 import { inTransaction } from '@/db/transaction';
@@ -8,8 +14,11 @@ import { AppError, notFound } from '@/lib/errors';
 import type { Actor } from '@/lib/rules/roles';
 import { endOfDay, type NewTokenInput } from '@/lib/schemas/tokens';
 import { hashToken } from '@/lib/token-hash';
+import { requireLaboratory } from './own-laboratory';
 
 export const TOKEN_PREFIX = 'assize_';
+/** More programs than any laboratory runs; without a limit a leaked password could make any number of them. */
+export const MOST_TOKENS = 20;
 const RANDOM_LENGTH = 40;
 const ALPHABET = '0123456789ABCDEFGHIJKLMNOPQRSTUVWXYZabcdefghijklmnopqrstuvwxyz';
 
@@ -29,6 +38,12 @@ export async function addToken(
   const token = makeTokenText();
   const expiresAt = endOfDay(input.expiresOn);
   return inTransaction(db(), async (trx) => {
+    if ((await countTokensInForce(trx, laboratoryId)) >= MOST_TOKENS) {
+      throw new AppError(
+        'conflict',
+        `A laboratory has at most ${MOST_TOKENS} tokens in force. Revoke one that is no longer used.`,
+      );
+    }
     const id = await createApiToken(trx, {
       laboratoryId,
       name: input.name,
@@ -65,9 +80,4 @@ export async function revokeToken(actor: Actor, id: number): Promise<void> {
 
 export async function listTokens(actor: Actor): Promise<ApiToken[]> {
   return listApiTokens(db(), requireLaboratory(actor));
-}
-
-function requireLaboratory(actor: Actor): number {
-  if (actor.laboratoryId === null) throw new AppError('forbidden', 'You belong to no laboratory.');
-  return actor.laboratoryId;
 }

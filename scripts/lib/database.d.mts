@@ -9,12 +9,17 @@ export interface DemoToken {
   laboratory: string;
   /** The round as it stands in addresses. */
   round: string;
+  /** An item and a measurand that the laboratory may report in it. */
+  item: string;
+  measurand: string;
   token: string;
 }
 
 export interface Demo {
   signIns: DemoSignIn[];
   tokens: DemoToken[];
+  /** The round that takes results, as it stands in addresses. */
+  openRound: string | null;
   /** True when this call seeded it. */
   seeded: boolean;
 }

@@ -41,8 +41,8 @@ export async function seed(dataDir) {
   });
   const line = stdout.trim().split('\n').at(-1) ?? '';
   try {
-    const { signIns = [], tokens = [], seeded = false } = JSON.parse(line);
-    return { signIns, tokens, seeded };
+    const { signIns = [], tokens = [], openRound = null, seeded = false } = JSON.parse(line);
+    return { signIns, tokens, openRound, seeded };
   } catch {
     throw new Stop(`${SEEDS} ended without the line of JSON that tells the sign-ins.`, { output });
   }

@@ -2,7 +2,6 @@ import { say } from './report.mjs';
 
 const COLUMNS_SHOWN = ['item', 'measurand', 'replicate', 'result', 'unit'];
 const RESULT_SHOWN = '4.2';
-const ROWS_SHOWN = 3;
 const FETCH_WITHIN_MS = 5_000;
 
 /** Prints the demonstration's sign-ins as a table and, for one laboratory, its token and a command that uses it. */
@@ -35,14 +34,17 @@ function table(rows) {
   );
 }
 
-/** A command that can be pasted: the first rows of the round's own template with a made-up result. */
-export async function curlExample({ round, token }, address) {
+/** A command that can be pasted: one row of the round's own template with a made-up result. */
+export async function curlExample({ round, token, item, measurand }, address) {
   const template = await fetchTemplate(`${address}/api/rounds/${round}/template`, token);
   if (template === null) return null;
-  const lines = fillTemplate(template).map((cells) => cells.join(','));
-  const csv = lines.join('\\n').replaceAll('%', '%%').replaceAll("'", "'\\''");
+  const [header, ...rows] = fillTemplate(template);
+  const isAsked = (row) =>
+    row[header.indexOf('item')] === item && row[header.indexOf('measurand')] === measurand;
+  const shown = [header, rows.find(isAsked) ?? rows[0] ?? []];
+  const csv = shown.map((cells) => cells.join(',')).join('\\n');
   return [
-    `printf '${csv}\\n'`,
+    `printf '${csv.replaceAll('%', '%%').replaceAll("'", "'\\''")}\\n'`,
     `| curl -sS --data-binary @- -H 'Content-Type: text/csv' -H 'Authorization: Bearer ${token}'`,
     `'${address}/api/rounds/${round}/results?check=1'`,
   ].join(' ');
@@ -59,18 +61,16 @@ async function fetchTemplate(url, token) {
   }
 }
 
-/** The header and the first rows, in the columns worth showing. Codes and units hold no quotation marks. */
-export function fillTemplate(template, rowCount = ROWS_SHOWN) {
+/** The template's header and rows in the columns worth showing, each with the result. Codes and units hold no commas. */
+export function fillTemplate(template, result = RESULT_SHOWN) {
   const lines = template
     .replace(/^\uFEFF/, '')
     .split(/\r?\n/)
     .filter((line) => line.trim());
   const [header = [], ...rows] = lines.map((line) => line.split(','));
   const shown = COLUMNS_SHOWN.filter((name) => header.includes(name));
-  const filled = rows
-    .slice(0, rowCount)
-    .map((cells) =>
-      shown.map((name) => (name === 'result' ? RESULT_SHOWN : (cells[header.indexOf(name)] ?? ''))),
-    );
+  const filled = rows.map((cells) =>
+    shown.map((name) => (name === 'result' ? result : (cells[header.indexOf(name)] ?? ''))),
+  );
   return [shown, ...filled];
 }

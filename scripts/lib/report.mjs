@@ -10,8 +10,15 @@ export class Stop extends Error {
 const LABEL_WIDTH = 14;
 const OUTPUT_LINES = 80;
 
+let stream = process.stdout;
+
+/** Sends what is said elsewhere, such as to standard error when standard output is for a program. */
+export function talkOn(other) {
+  stream = other;
+}
+
 export function say(text = '') {
-  process.stdout.write(`${text}\n`);
+  stream.write(`${text}\n`);
 }
 
 export function sayStep(name, text) {
@@ -23,7 +30,7 @@ export async function step(name, work) {
   let isAnnounced = false;
   const announce = (text) => {
     isAnnounced = true;
-    process.stdout.write(`${name.padEnd(LABEL_WIDTH)}${text} ... `);
+    stream.write(`${name.padEnd(LABEL_WIDTH)}${text} ... `);
   };
   try {
     const outcome = await work(announce);

@@ -35,7 +35,7 @@ export function run(command, args, { env = {}, cwd = ROOT, isShown = false } = {
     const child = track(
       spawn(command, args, {
         cwd,
-        env: { ...process.env, NEXT_TELEMETRY_DISABLED: '1', ...env },
+        env: { ...process.env, NEXT_TELEMETRY_DISABLED: '1', ...colours(isShown), ...env },
         stdio: ['ignore', 'pipe', 'pipe'],
       }),
     );
@@ -53,6 +53,12 @@ export function run(command, args, { env = {}, cwd = ROOT, isShown = false } = {
     child.once('error', reject);
     child.once('close', (code, signal) => resolve({ code: code ?? 1, signal, stdout, output }));
   });
+}
+
+/** Output passes through a pipe, where a program cannot see whether a person watches; what is read by us is plain. */
+function colours(isShown) {
+  const areWanted = isShown && process.stdout.isTTY && !process.env.NO_COLOR;
+  return areWanted ? { FORCE_COLOR: '1' } : { NO_COLOR: '1', FORCE_COLOR: undefined };
 }
 
 /** As run, and stops with `message` when the program fails. */

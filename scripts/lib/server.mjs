@@ -78,10 +78,13 @@ export async function startServer({
   });
   if (logFile) fs.closeSync(output);
   if (dir === ROOT) noteServing({ pid, address: baseUrl, dataDir });
-  const killWithParent = () => child.kill('SIGKILL');
-  process.once('exit', killWithParent);
+  const endWithParent = () => {
+    child.kill('SIGKILL');
+    forgetServing(pid);
+  };
+  process.once('exit', endWithParent);
   void exited.then(() => {
-    process.off('exit', killWithParent);
+    process.off('exit', endWithParent);
     forgetServing(pid);
   });
   const server = { pid, baseUrl, logFile, exited, ...endings(child, exited) };

@@ -14,7 +14,7 @@ export async function runVitest(project) {
       VITEST,
       'run',
       ...['--project', project],
-      ...['--reporter', process.stdout.isTTY ? 'default' : 'dot', '--reporter', 'json'],
+      ...['--reporter', 'default', '--reporter', 'json'],
       ...['--outputFile.json', report],
     ],
     { env: { NODE_ENV: 'test', TZ: 'UTC' }, isShown: true },

@@ -25,7 +25,7 @@ export interface Habits {
 
 /** Shares of laboratories and sizes of scatter, chosen so that most z lie within 2. */
 const BIAS = 0.6;
-const SPREAD = 0.85;
+const SPREAD = 0.8;
 const WITHOUT_UNCERTAINTY = 0.25;
 const WITH_HEAVY_TAILS = 0.15;
 const WITH_COMMA = 0.2;

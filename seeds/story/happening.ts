@@ -1,5 +1,5 @@
 import type { Db } from '@/db/connection';
-import { at } from './clock';
+import { atMoment } from '@/db/clock';
 
 /** Something that happened at a moment of the story, and how it is written down. */
 export interface Happening {
@@ -10,5 +10,5 @@ export interface Happening {
 /** Writes down what happened in the order in which it happened, so that ids and times run together. */
 export async function tellInOrder(trx: Db, happenings: readonly Happening[]): Promise<void> {
   const inOrder = [...happenings].sort((a, b) => (a.moment < b.moment ? -1 : a.moment > b.moment ? 1 : 0));
-  for (const { moment, tell } of inOrder) await at(moment, () => tell(trx));
+  for (const { moment, tell } of inOrder) await atMoment(moment, () => tell(trx));
 }

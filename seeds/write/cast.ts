@@ -21,7 +21,7 @@ import {
 } from '../scenario/people';
 import { SENDS_BY_TOKEN, TOKEN_HOLDERS } from '../scenario/telling-events';
 import type { Calendar } from '../story/calendar';
-import { at } from '../story/clock';
+import { atMoment } from '@/db/clock';
 
 export type PasswordHashes = Readonly<Record<keyof typeof PASSWORDS, string>>;
 
@@ -116,7 +116,7 @@ export async function writeCast(
   hashes: PasswordHashes,
 ): Promise<Cast> {
   const writer = new CastWriter(trx, hashes);
-  const cast = await at(calendar.moment(FOUNDED), async () => {
+  return atMoment(calendar.moment(FOUNDED), async () => {
     const administratorId = await writer.person(ADMINISTRATOR, null);
     const coordinatorIds = [
       await writer.person(COORDINATORS[0], null),
@@ -131,7 +131,6 @@ export async function writeCast(
     await writer.sharedAnalyst(members);
     return { administratorId, coordinatorIds, reviewerIds, members };
   });
-  return cast;
 }
 
 /** The tokens are made while the rounds go on. */

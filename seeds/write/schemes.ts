@@ -5,7 +5,7 @@ import { createScheme } from '@/db/scheme-store';
 import { slugify } from '@/lib/slug';
 import { SCHEMES, UNIT, type SchemeKey } from '../scenario/schemes';
 import type { Calendar } from '../story/calendar';
-import { at } from '../story/clock';
+import { atMoment } from '@/db/clock';
 
 export interface WrittenScheme {
   id: number;
@@ -33,7 +33,10 @@ export async function writeSchemes(
 ): Promise<ReadonlyMap<SchemeKey, WrittenScheme>> {
   const written = new Map<SchemeKey, WrittenScheme>();
   for (const plan of SCHEMES) {
-    written.set(plan.key, await at(calendar.moment(SCHEMES_MADE), () => writeScheme(trx, plan, userId)));
+    written.set(
+      plan.key,
+      await atMoment(calendar.moment(SCHEMES_MADE), () => writeScheme(trx, plan, userId)),
+    );
   }
   return written;
 }

@@ -32,7 +32,7 @@ export interface TestBrowser {
 }
 
 /** Call once at the top of a file. After each test the pages must have complained of nothing unexpected. */
-export function useBrowser(): TestBrowser {
+export function testBrowser(): TestBrowser {
   let browser: Browser | undefined;
   const contexts: BrowserContext[] = [];
   const complaints: string[] = [];

@@ -46,7 +46,10 @@ async function lastLogId(): Promise<number> {
 async function expectRefused(response: Response, statuses: number[]): Promise<void> {
   const text = await response.text();
   expect(statuses, `${response.status} ${response.url}`).toContain(response.status);
+  const asked = decodeURIComponent(response.url);
   for (const secret of [inside.name, inside.participantCode, receipt, '12.5', '34.5']) {
+    // A page that says what is missing may repeat the address it was asked for.
+    if (asked.includes(secret)) continue;
     expect(text, `what ${response.url} answered`).not.toContain(secret);
   }
 }

@@ -42,7 +42,7 @@ function inDays(days: number): string {
   return new Date(Date.now() + days * DAY_MS).toISOString();
 }
 
-async function makeLaboratory(
+export async function makeLaboratory(
   connection: Db,
   name: string,
 ): Promise<Omit<FixtureLaboratory, 'participantCode'>> {

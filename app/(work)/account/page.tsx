@@ -21,29 +21,31 @@ export default async function AccountPage() {
     <>
       <PageHeader title="Account" lead={`${actor.name}, ${actor.email}`} />
       <div className="grid gap-x-12 gap-y-8 md:grid-cols-2">
-        <section className="flex flex-col gap-3" aria-labelledby="roles">
-          <h2 id="roles">Roles</h2>
-          {roles.length > 0 ? (
-            <Facts items={roles} />
-          ) : (
-            <p className="text-ink-soft">You hold no role yet. Whoever invited you can give you one.</p>
-          )}
-        </section>
+        <div className="flex flex-col gap-8">
+          <section className="flex flex-col gap-3" aria-labelledby="roles">
+            <h2 id="roles">Roles</h2>
+            {roles.length > 0 ? (
+              <Facts items={roles} />
+            ) : (
+              <p className="text-ink-soft">You hold no role yet. Whoever invited you can give you one.</p>
+            )}
+          </section>
+          <section className="flex flex-col gap-3" aria-labelledby="sessions">
+            <h2 id="sessions">Where you are signed in</h2>
+            <p>
+              {sessions === 1 ? 'Only here.' : `In ${formatCount(sessions, 'place')}, this one among them.`} A
+              sign-in lasts twelve hours.
+            </p>
+            <form action={signOutEverywhereAction}>
+              <SubmitButton variant="plain" pendingLabel="Signing out">
+                Sign out everywhere
+              </SubmitButton>
+            </form>
+          </section>
+        </div>
         <section className="flex flex-col gap-3" aria-labelledby="password">
           <h2 id="password">Password</h2>
           <ChangePasswordForm email={actor.email} />
-        </section>
-        <section className="flex flex-col gap-3" aria-labelledby="sessions">
-          <h2 id="sessions">Where you are signed in</h2>
-          <p>
-            {sessions === 1 ? 'Only here.' : `In ${formatCount(sessions, 'place')}, this one among them.`} A
-            sign-in lasts twelve hours.
-          </p>
-          <form action={signOutEverywhereAction}>
-            <SubmitButton variant="plain" pendingLabel="Signing out">
-              Sign out everywhere
-            </SubmitButton>
-          </form>
         </section>
       </div>
     </>

@@ -50,7 +50,7 @@ export default async function LaboratoriesPage({ searchParams }: PageProps<'/lab
 
 function LaboratoryTable({ laboratories, caption }: { laboratories: LaboratoryLine[]; caption: string }) {
   return (
-    <Table caption={caption}>
+    <Table caption={caption} stacked>
       <thead>
         <tr>
           <Th>Name</Th>
@@ -69,12 +69,12 @@ function LaboratoryTable({ laboratories, caption }: { laboratories: LaboratoryLi
               </Link>
               {!laboratory.isActive && <span className="text-ink-soft"> (no longer active)</span>}
             </Th>
-            <Td>{laboratoryKindName(laboratory.kind)}</Td>
-            <Td>{laboratory.town}</Td>
-            <Td numeric className="figures">
+            <Td label="Kind">{laboratoryKindName(laboratory.kind)}</Td>
+            <Td label="Town">{laboratory.town || '\u2013'}</Td>
+            <Td label="People" numeric className="figures">
               {laboratory.peopleCount}
             </Td>
-            <Td numeric className="figures">
+            <Td label="Rounds" numeric className="figures">
               {laboratory.roundCount}
             </Td>
           </tr>

@@ -4,7 +4,7 @@ import { revalidatePath } from 'next/cache';
 import { redirect } from 'next/navigation';
 import * as z from 'zod';
 import { formAction } from '@/lib/action';
-import { requiredText } from '@/lib/schemas/fields';
+import { requiredNote, requiredText } from '@/lib/schemas/fields';
 import { newRoundSchema } from '@/lib/schemas/rounds';
 import { evaluateRound } from '@/lib/services/evaluate-round';
 import { addRound } from '@/lib/services/round-plan';
@@ -63,7 +63,7 @@ export const publishRoundAction = formAction({
 
 export const cancelRoundAction = formAction({
   permission: 'round:cancel',
-  schema: inRound.extend({ reason: requiredText('the reason', 500) }),
+  schema: inRound.extend({ reason: requiredNote('the reason', 500) }),
   run: async ({ round, reason }, { actor }) => {
     await cancelRound(actor, round, reason);
     revalidatePath('/rounds', 'layout');

@@ -13,20 +13,24 @@ export function checkInput(input: EvaluateMeasurandInput): void {
     }
     seen.add(participant);
   }
-  for (const { participant, value, standardUncertainty } of input.results) {
+  for (const { participant, value, standardUncertainty, expandedUncertainty } of input.results) {
     requireFinite(`a finite result of ${participant}`, value);
-    if (standardUncertainty === null) continue;
-    requireFinite(`a finite standard uncertainty of ${participant}`, standardUncertainty);
-    if (standardUncertainty < 0) {
-      const asked = `a standard uncertainty of zero or more of ${participant}`;
-      throw new StatsError(
-        'out-of-domain',
-        `evaluateMeasurand requires ${asked}, found ${standardUncertainty}`,
-      );
-    }
+    requireUncertainty(`standard uncertainty of ${participant}`, standardUncertainty);
+    requireUncertainty(`expanded uncertainty of ${participant}`, expandedUncertainty ?? null);
   }
   for (const { participant, limit } of input.censored)
     requireFinite(`a finite limit of ${participant}`, limit);
+}
+
+function requireUncertainty(what: string, uncertainty: number | null): void {
+  if (uncertainty === null) return;
+  requireFinite(`a finite ${what}`, uncertainty);
+  if (uncertainty < 0) {
+    throw new StatsError(
+      'out-of-domain',
+      `evaluateMeasurand requires a ${what} of zero or more, found ${uncertainty}`,
+    );
+  }
 }
 
 function requireFinite(asked: string, value: number): void {

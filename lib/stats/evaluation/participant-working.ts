@@ -61,8 +61,9 @@ function scoreSteps(evaluation: MeasurandEvaluation, entry: ParticipantScore): W
   push("z'", zPrime, CLAUSES.zPrime, { x_i, x_pt, sigma_pt, u_x_pt }, entry.zPrime);
   const zeta = 'zeta = (x_i - x_pt) / sqrt(u_x_i^2 + u_x_pt^2)';
   push('zeta', zeta, CLAUSES.zeta, { x_i, x_pt, u_x_i, u_x_pt }, entry.zeta);
-  const eN = 'E_n = (x_i - x_pt) / sqrt((k * u_x_i)^2 + (k * u_x_pt)^2)';
-  push('E_n', eN, CLAUSES.eN, { x_i, x_pt, u_x_i, u_x_pt, k }, entry.eN);
+  const eN = 'E_n = (x_i - x_pt) / sqrt(U_x_i^2 + (k * u_x_pt)^2)';
+  const U_x_i = entry.expandedUncertainty;
+  push('E_n', eN, CLAUSES.eN, { x_i, x_pt, U_x_i, u_x_pt, k }, entry.eN);
   steps.push(signalStep(evaluation, entry));
   if (entry.uncertaintyClass !== null) steps.push(uncertaintyStep(evaluation, entry));
   return steps;

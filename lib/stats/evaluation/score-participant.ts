@@ -39,6 +39,7 @@ export function scoreParticipant(
     participant,
     value: value + 0, // a negative zero would not survive JSON
     standardUncertainty: standardUncertainty === null ? null : standardUncertainty + 0,
+    expandedUncertainty: expandedUncertaintyOf(result, basis.coverageFactor),
     excluded,
     D: D.value,
     dPercent: dPercent.value,
@@ -51,6 +52,14 @@ export function scoreParticipant(
     uncertaintyClass: uncertaintyClassOf(standardUncertainty, basis),
     reason: judged.reason,
   };
+}
+
+function expandedUncertaintyOf(
+  { standardUncertainty, expandedUncertainty }: MeasurandResult,
+  coverageFactor: number,
+): number | null {
+  if (standardUncertainty === null) return null;
+  return (expandedUncertainty ?? coverageFactor * standardUncertainty) + 0;
 }
 
 function withAssigned(basis: ScoringBasis, compute: (assignedValue: number) => number): Attempt<number> {
@@ -74,7 +83,8 @@ function allScores(result: MeasurandResult, basis: ScoringBasis): Record<JudgedS
     sigmaPt === null
       ? missing(NO_SIGMA)
       : attempt(() => zPrimeScore({ value, assignedValue, sigmaPt, assignedUncertainty }));
-  if (standardUncertainty === null) {
+  const expandedUncertainty = expandedUncertaintyOf(result, coverageFactor);
+  if (standardUncertainty === null || expandedUncertainty === null) {
     const none = missing(NO_UNCERTAINTY);
     return { z, 'z-prime': zPrime, zeta: none, 'e-n': none };
   }
@@ -83,7 +93,7 @@ function allScores(result: MeasurandResult, basis: ScoringBasis): Record<JudgedS
     eNScore({
       value,
       assignedValue,
-      expandedUncertainty: coverageFactor * standardUncertainty,
+      expandedUncertainty,
       assignedExpandedUncertainty: coverageFactor * assignedUncertainty,
     }),
   );

@@ -10,6 +10,8 @@ export interface MeasurandResult {
   readonly participant: string;
   readonly value: number;
   readonly standardUncertainty: number | null;
+  /** U(x_i) as the participant stated it, for E_n; without it, 2 u(x_i) is taken. */
+  readonly expandedUncertainty?: number | null;
 }
 
 export interface CensoredResult {
@@ -115,6 +117,8 @@ export interface ParticipantScore {
   readonly participant: string;
   readonly value: number;
   readonly standardUncertainty: number | null;
+  /** U(x_i) in E_n: as stated, or the coverage factor times u(x_i). */
+  readonly expandedUncertainty: number | null;
   readonly excluded: boolean;
   readonly D: number | null;
   readonly dPercent: number | null;
@@ -159,7 +163,7 @@ export interface MeasurandEvaluation {
   readonly negligibleUncertainty: NegligibleUncertainty;
   readonly scoreKind: JudgedScore;
   readonly scoreKindReason: string;
-  /** Coverage factor that makes the expanded uncertainties of E_n. */
+  /** Coverage factor of U(x_pt) in E_n, and of U(x_i) where a participant stated none. */
   readonly coverageFactor: number;
   readonly scores: readonly ParticipantScore[];
   readonly censored: readonly CensoredScore[];

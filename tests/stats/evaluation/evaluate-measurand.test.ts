@@ -72,6 +72,17 @@ describe('evaluateMeasurand', () => {
     expect(found.assigned).toMatchObject({ count: 0, method: 'stated', value: 10, standardUncertainty: 0.1 });
   });
 
+  it('takes the expanded uncertainty as stated for E_n, whatever its coverage factor', () => {
+    const results = [
+      { participant: 'A', value: 12, standardUncertainty: 0.5, expandedUncertainty: 1.5 },
+      { participant: 'B', value: 12, standardUncertainty: 0.5 },
+    ];
+    const found = evaluateMeasurand(inputOf({ results, assignedValue: stated, sigmaPt: prescribed }));
+    expectClose(found.scores[0]?.eN ?? NaN, 2 / Math.hypot(1.5, 0.2), { rtol: 1e-14 });
+    expectClose(found.scores[1]?.eN ?? NaN, 2 / Math.hypot(1, 0.2), { rtol: 1e-14 });
+    expect(found.scores.map((entry) => entry.expandedUncertainty)).toEqual([1.5, 1]);
+  });
+
   it('scores excluded participants without letting them make the consensus', () => {
     const found = evaluateMeasurand(inputOf({ excluded: ['P15'] }));
     const without = evaluateMeasurand(inputOf({ results: resultsOf(VALUES.slice(0, -1)) }));

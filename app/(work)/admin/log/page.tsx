@@ -1,4 +1,5 @@
 import Link from 'next/link';
+import { installationWords } from '@/components/rounds/log-words';
 import { EmptyState } from '@/components/ui/empty-state';
 import { PageHeader } from '@/components/ui/page-header';
 import { FilledSquare } from '@/components/ui/shapes';
@@ -19,7 +20,7 @@ export default async function LogPage({ searchParams }: PageProps<'/admin/log'>)
     <>
       <PageHeader
         title="Log"
-        lead="What was done and what was refused, newest first. Lines are written once and never changed."
+        lead="What was done and what was refused, the newest first. Lines are written once and never changed."
       />
       <SearchForm path="/admin/log" text={query.text} label="Text in any column" />
       {log.total === 0 ? (
@@ -38,7 +39,7 @@ export default async function LogPage({ searchParams }: PageProps<'/admin/log'>)
 
 function LogTable({ lines, caption }: { lines: LogLine[]; caption: string }) {
   return (
-    <Table caption={caption}>
+    <Table caption={caption} stacked>
       <thead>
         <tr>
           <Th>When</Th>
@@ -51,10 +52,15 @@ function LogTable({ lines, caption }: { lines: LogLine[]; caption: string }) {
       <tbody>
         {lines.map((line) => (
           <tr key={line.id}>
-            <Td className="figures">{formatDateTime(line.at)}</Td>
-            <Td className="min-w-28">{whoOf(line)}</Td>
-            <Td className="whitespace-nowrap">
-              {line.action}
+            <Td label="When" className="figures">
+              {formatDateTime(line.at)}
+            </Td>
+            <Td label="Who" className="min-w-36">
+              {whoOf(line)}
+            </Td>
+            <Td label="What" className="min-w-56">
+              {installationWords(line.action)}
+              <span className="block font-mono text-xs text-ink-faint">{line.action}</span>
               {line.outcome === 'refused' && (
                 <span className="flex items-baseline gap-1.5 font-semibold text-action">
                   <FilledSquare />
@@ -62,10 +68,15 @@ function LogTable({ lines, caption }: { lines: LogLine[]; caption: string }) {
                 </span>
               )}
             </Td>
-            <Td className="min-w-32">
+            <Td label={line.laboratoryName || line.roundSlug ? 'Where' : undefined} className="min-w-32">
               <Where line={line} />
             </Td>
-            <Td className="min-w-40 wrap-anywhere">{line.detail}</Td>
+            <Td
+              label={line.detail ? 'Detail' : undefined}
+              className="min-w-40 wrap-anywhere text-sm text-ink-soft"
+            >
+              {line.detail}
+            </Td>
           </tr>
         ))}
       </tbody>

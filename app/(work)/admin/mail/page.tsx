@@ -42,7 +42,7 @@ export default async function MailPage({ searchParams }: PageProps<'/admin/mail'
 
 function MailTable({ mail, caption }: { mail: MailLine[]; caption: string }) {
   return (
-    <Table caption={caption}>
+    <Table caption={caption} stacked>
       <thead>
         <tr>
           <Th>Written</Th>
@@ -54,14 +54,18 @@ function MailTable({ mail, caption }: { mail: MailLine[]; caption: string }) {
       <tbody>
         {mail.map((line) => (
           <tr key={line.id}>
-            <Td className="figures">{formatDateTime(line.createdAt)}</Td>
-            <Td className="wrap-anywhere">{line.toAddress}</Td>
+            <Td label="Written" className="figures">
+              {formatDateTime(line.createdAt)}
+            </Td>
+            <Td label="To" className="min-w-48 wrap-anywhere">
+              {line.toAddress}
+            </Td>
             <Th scope="row" className="min-w-40 align-top">
               <Link href={`/admin/mail/${line.id}`} className="text-link">
                 {line.subject}
               </Link>
             </Th>
-            <Td>{mailStateInWords(line)}</Td>
+            <Td label="State">{mailStateInWords(line)}</Td>
           </tr>
         ))}
       </tbody>

@@ -42,7 +42,7 @@ function PeopleTable({ people, caption }: { people: PersonLine[]; caption: strin
       <thead>
         <tr>
           <Th>Name</Th>
-          <Th>E-mail</Th>
+          <Th className="hidden md:table-cell">E-mail</Th>
           <Th>Roles</Th>
           <Th>Account</Th>
         </tr>
@@ -54,8 +54,11 @@ function PeopleTable({ people, caption }: { people: PersonLine[]; caption: strin
               <Link href={`/admin/people/${person.id}`} className="text-link font-semibold">
                 {person.name}
               </Link>
+              <span className="block text-sm font-normal text-ink-soft wrap-anywhere md:hidden">
+                {person.email}
+              </span>
             </Th>
-            <Td className="wrap-anywhere">{person.email}</Td>
+            <Td className="hidden wrap-anywhere md:table-cell">{person.email}</Td>
             <Td>
               <RoleList memberships={person.memberships} />
             </Td>

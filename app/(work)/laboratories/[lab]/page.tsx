@@ -80,11 +80,11 @@ function Enrolments({ enrolments }: { enrolments: EnrolmentLine[] }) {
     );
   }
   return (
-    <Table caption="Rounds of the laboratory" hideCaption>
+    <Table caption="Rounds of the laboratory" hideCaption stacked>
       <thead>
         <tr>
           <Th>Round</Th>
-          <Th>Closes</Th>
+          <Th>Results due</Th>
           <Th>Enrolment</Th>
           <Th>Results</Th>
         </tr>
@@ -97,11 +97,13 @@ function Enrolments({ enrolments }: { enrolments: EnrolmentLine[] }) {
                 {enrolment.roundName}
               </Link>
             </Th>
-            <Td className="figures">{formatDate(enrolment.closesAt)}</Td>
-            <Td>
+            <Td label="Results due" className="figures">
+              {formatDate(enrolment.closesAt)}
+            </Td>
+            <Td label="Enrolment">
               <StateTag of="enrolment" state={enrolment.state} />
             </Td>
-            <Td>
+            <Td label="Results">
               <StateTag of="submission" state={enrolment.hasSubmitted ? 'submitted' : 'none'} />
             </Td>
           </tr>
@@ -124,7 +126,7 @@ function People({ people, linked }: { people: ColleagueLine[]; linked: boolean }
       <thead>
         <tr>
           <Th>Name</Th>
-          <Th>E-mail</Th>
+          <Th className="hidden md:table-cell">E-mail</Th>
           <Th>Roles</Th>
           <Th>Account</Th>
         </tr>
@@ -140,8 +142,11 @@ function People({ people, linked }: { people: ColleagueLine[]; linked: boolean }
               ) : (
                 person.name
               )}
+              <span className="block text-sm font-normal text-ink-soft wrap-anywhere md:hidden">
+                {person.email}
+              </span>
             </Th>
-            <Td className="wrap-anywhere">{person.email}</Td>
+            <Td className="hidden wrap-anywhere md:table-cell">{person.email}</Td>
             <Td>{person.roles.map((role) => ROLE_NAMES[role]).join(', ')}</Td>
             <Td>{accountState(person)}</Td>
           </tr>

@@ -25,7 +25,7 @@ export default async function LaboratoryPeoplePage() {
         <thead>
           <tr>
             <Th>Name</Th>
-            <Th>E-mail</Th>
+            <Th className="hidden md:table-cell">E-mail</Th>
             <Th>Roles</Th>
             <Th>Account</Th>
           </tr>
@@ -50,8 +50,11 @@ function PersonRow({ person }: { person: Colleague }) {
     <tr>
       <Th scope="row" className="min-w-32 align-top font-semibold">
         {person.name}
+        <span className="block text-sm font-normal text-ink-soft wrap-anywhere md:hidden">
+          {person.email}
+        </span>
       </Th>
-      <Td className="wrap-anywhere">{person.email}</Td>
+      <Td className="hidden wrap-anywhere md:table-cell">{person.email}</Td>
       <Td>
         <ul>
           {person.roles.map((role) => (

@@ -49,7 +49,7 @@ function stateOf(token: Token, now: string): string {
 
 function TokenTable({ tokens, now }: { tokens: Token[]; now: string }) {
   return (
-    <Table caption="Tokens" hideCaption>
+    <Table caption="Tokens" hideCaption stacked>
       <thead>
         <tr>
           <Th>Name</Th>
@@ -66,14 +66,24 @@ function TokenTable({ tokens, now }: { tokens: Token[]; now: string }) {
       <tbody>
         {tokens.map((token) => (
           <tr key={token.id}>
-            <Th scope="row" className="min-w-32 font-semibold">
+            <Th scope="row" className="min-w-32 align-top font-semibold">
               {token.name}
             </Th>
-            <Td className="font-mono text-sm">{token.lastFour}</Td>
-            <Td className="figures">{formatDate(token.createdAt)}</Td>
-            <Td className="figures">{formatDate(token.expiresAt)}</Td>
-            <Td className="figures">{token.lastUsedAt ? formatDateTime(token.lastUsedAt) : 'never'}</Td>
-            <Td className="whitespace-nowrap">{stateOf(token, now)}</Td>
+            <Td label="Ends in" className="font-mono text-sm">
+              {token.lastFour}
+            </Td>
+            <Td label="Made" className="figures">
+              {formatDate(token.createdAt)}
+            </Td>
+            <Td label="Last day" className="figures">
+              {formatDate(token.expiresAt)}
+            </Td>
+            <Td label="Last used" className="figures">
+              {token.lastUsedAt ? formatDateTime(token.lastUsedAt) : 'never'}
+            </Td>
+            <Td label="State" className="whitespace-nowrap">
+              {stateOf(token, now)}
+            </Td>
             <Td className="text-right">
               {stateOf(token, now) === 'in force' && <RevokeToken id={token.id} name={token.name} />}
             </Td>

@@ -27,10 +27,12 @@ const PERMISSIONS: Record<Step, Permission> = {
   publish: 'round:publish',
 };
 
-/** The next step as one button; while something blocks it, the button says so and the round line says what. */
+/** The next step as one button; while something blocks it, it says so; the round line leads to what. */
 export function StepButtons({ actor, overview }: { actor: Actor; overview: RoundOverview }) {
   const { round, facts, next, blockers, now } = overview;
   const mayStep = next !== null && can(actor, PERMISSIONS[next]);
+  // Before the results are due, the round line does not call a missing result a hold-up.
+  const isSaidHere = next === 'close' && !round.isPast && round.closesAt > now;
   const mayCancel = can(actor, 'round:cancel') && ROUND_STEPS.cancel.from.includes(round.state);
   return (
     <>
@@ -50,12 +52,25 @@ export function StepButtons({ actor, overview }: { actor: Actor; overview: Round
         </ConfirmDialog>
       )}
       {mayStep && blockers.length === 0 && (
-        <NextStep step={next} facts={facts} now={now} action={ACTIONS[next].bind(null, null)} />
+        <NextStep
+          step={next}
+          facts={facts}
+          now={now}
+          publishAt={round.publishAt}
+          action={ACTIONS[next].bind(null, null)}
+        />
       )}
       {mayStep && blockers.length > 0 && (
-        <Button variant="primary" disabled title={blockers.map((blocker) => blocker.text).join(' ')}>
-          {stepLabel(next)}
-        </Button>
+        <div>
+          <Button variant="primary" disabled aria-describedby={isSaidHere ? 'step-blockers' : undefined}>
+            {stepLabel(next)}
+          </Button>
+          {isSaidHere && (
+            <p id="step-blockers" className="mt-1 max-w-64 text-sm text-ink-soft">
+              {blockers.map((blocker) => blocker.text).join(' ')}
+            </p>
+          )}
+        </div>
       )}
     </>
   );

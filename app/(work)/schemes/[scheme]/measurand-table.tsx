@@ -11,7 +11,7 @@ export function MeasurandTable({
   edit?: (measurand: Measurand) => ReactNode;
 }) {
   return (
-    <Table caption="Measurands" hideCaption>
+    <Table caption="Measurands" hideCaption fullHeight stacked>
       <thead>
         <tr>
           <Th>Code</Th>
@@ -33,10 +33,12 @@ export function MeasurandTable({
             <Th scope="row" className="font-semibold">
               {measurand.code}
             </Th>
-            <Td>{measurand.name}</Td>
-            <Td>{measurand.unit}</Td>
-            <Td numeric>{measurand.decimals}</Td>
-            <Td>
+            <Td label="Name">{measurand.name}</Td>
+            <Td label="Unit">{measurand.unit}</Td>
+            <Td label="Decimals" numeric>
+              {measurand.decimals}
+            </Td>
+            <Td label="Decision limit">
               {measurand.decisionLimit === null ? (
                 <span className="text-grey">none</span>
               ) : (
@@ -48,8 +50,8 @@ export function MeasurandTable({
                 </>
               )}
             </Td>
-            <Td>{sigmaWords(measurand, measurand.unit)}</Td>
-            {edit && <Td className="text-right">{edit(measurand)}</Td>}
+            <Td label="sigma_pt">{sigmaWords(measurand, measurand.unit)}</Td>
+            {edit && <Td className="text-right whitespace-nowrap">{edit(measurand)}</Td>}
           </tr>
         ))}
       </tbody>

@@ -31,7 +31,7 @@ export default async function OneMailPage({ params }: PageProps<'/admin/mail/[ma
     <>
       <PageHeader title={mail.subject} breadcrumb={[{ href: '/admin/mail', label: 'Mail' }]} />
       <Facts
-        className="max-w-prose"
+        className="max-w-measure"
         items={[
           { label: 'To', value: mail.toAddress },
           { label: 'Written', value: formatDateTime(mail.createdAt) },

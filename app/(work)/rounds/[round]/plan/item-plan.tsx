@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { ItemDialog } from '@/components/forms/item-dialog';
-import { MeasurandPlanDialog, type MeasurandPlanValues } from '@/components/forms/measurand-plan-form';
+import { MeasurandPlanDialog } from '@/components/forms/measurand-plan-dialog';
+import type { MeasurandPlanValues } from '@/components/forms/measurand-plan-form';
 import { assignedWords, scoreWords, sigmaWords } from '@/components/rounds/plan-words';
 import { ConfirmDialog } from '@/components/ui/confirm-dialog';
 import { Table, Td, Th } from '@/components/ui/table';
@@ -43,7 +44,7 @@ export function ItemPlan({ round, item, measurands, isDraft, children }: ItemPla
       {measurands.length === 0 ? (
         <p className="text-ink-soft">No measurand yet.</p>
       ) : (
-        <Table caption={`Measurands of item ${item.code}`} hideCaption fullHeight>
+        <Table caption={`Measurands of item ${item.code}`} hideCaption fullHeight stacked>
           <thead>
             <tr>
               <Th>Measurand</Th>
@@ -86,14 +87,20 @@ function MeasurandRow({
       <Th scope="row">
         <span className="font-semibold">{entry.code}</span> {entry.name}
       </Th>
-      <Td>{entry.unit}</Td>
-      <Td numeric>{entry.replicates}</Td>
-      <Td>
+      <Td label="Unit">{entry.unit}</Td>
+      <Td label="Replicates" numeric>
+        {entry.replicates}
+      </Td>
+      <Td label="Assigned value" className="min-w-40">
         {assignedWords(entry, entry.unit)}
         {entry.statedSource && <span className="block text-sm text-ink-soft">{entry.statedSource}</span>}
       </Td>
-      <Td>{sigmaWords(entry, entry.unit)}</Td>
-      <Td>{scoreWords(entry)}</Td>
+      <Td label="sigma_pt" className="min-w-40">
+        {sigmaWords(entry, entry.unit)}
+      </Td>
+      <Td label="Score" className="min-w-40">
+        {scoreWords(entry)}
+      </Td>
       {isDraft && (
         <Td className="text-right whitespace-nowrap">
           <MeasurandPlanDialog

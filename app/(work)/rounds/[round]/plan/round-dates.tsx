@@ -32,9 +32,9 @@ export function RoundDates({ round, mayEdit }: { round: Round; mayEdit: boolean 
           { label: 'Past round', value: round.isPast ? 'yes, loaded from a file' : 'no' },
         ]}
       />
-      <div>
+      <div className="flex flex-col gap-1 pt-2">
         <h3>Instructions to participants</h3>
-        <p className="max-w-prose whitespace-pre-wrap">
+        <p className="max-w-measure whitespace-pre-wrap">
           {round.instructions || <span className="text-ink-soft">None yet.</span>}
         </p>
       </div>

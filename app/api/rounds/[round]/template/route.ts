@@ -2,7 +2,7 @@ import { authorise } from '@/lib/auth/authorise';
 import { addRefusal } from '@/lib/auth/refusals';
 import { actorFromRequest } from '@/lib/auth/request';
 import { handle } from '@/lib/http';
-import { laboratoryTemplate, wholeRoundTemplate } from '@/lib/services/results-template';
+import { laboratoryTemplate, roundTemplate } from '@/lib/services/results-template';
 
 type Context = RouteContext<'/api/rounds/[round]/template'>;
 
@@ -19,7 +19,7 @@ export const GET = handle(async (request: Request, { params }: Context) => {
     : await authorise(who, 'own:view', { laboratoryId });
   const text = await addRefusal(actor, `template of ${round}`, () =>
     isWhole || laboratoryId === null
-      ? wholeRoundTemplate(round, separator)
+      ? roundTemplate(round, separator)
       : laboratoryTemplate(round, laboratoryId, separator),
   );
   return new Response(text, {
