@@ -85,7 +85,7 @@ function partsOf(caller: string, x: readonly number[], y: readonly number[]) {
   if (sxx === 0 || syy === 0) {
     throw new StatsError('no-spread', `${caller} requires at least two different values of each method`);
   }
-  const correlation = Math.min(1, Math.max(-1, sxy / Math.sqrt(sxx) / Math.sqrt(syy)));
+  const correlation = Math.min(1, Math.max(-1, sxy / Math.sqrt(sxx * syy)));
   const scaleShift = Math.sqrt(syy / sxx) * (unitY / unitX);
   // Difference of the means in the unit of x, then in the geometric mean of both standard deviations.
   const shift = meanY * (unitY / unitX) - meanX;

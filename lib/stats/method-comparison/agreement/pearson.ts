@@ -56,7 +56,7 @@ export function correlationOf(
   if (sxx === 0 || syy === 0) {
     throw new StatsError('no-spread', `${caller} requires at least two different values of each method`);
   }
-  const coefficient = Math.min(1, Math.max(-1, sxy / Math.sqrt(sxx) / Math.sqrt(syy))) + 0;
+  const coefficient = Math.min(1, Math.max(-1, sxy / Math.sqrt(sxx * syy))) + 0;
   return {
     count,
     coefficient,

@@ -22,7 +22,7 @@ export function buildLineFit(problem: LineProblem): LineFit {
   const { caller, x, y, weights, throughOrigin, known, confidence } = problem;
   const solved = fitPolynomial({ caller, x, y, weights, degree: 1, intercept: !throughOrigin });
   const degreesOfFreedom = x.length - (throughOrigin ? 1 : 2);
-  const residualSd = representable(caller, Math.sqrt(solved.residualSquares / degreesOfFreedom));
+  const residualSd = representable(caller, solved.residualSize / Math.sqrt(degreesOfFreedom));
   const factor = known ? zFactor(confidence) : tFactor(confidence, degreesOfFreedom);
   const errors = standardErrors(solved, throughOrigin, known ? 1 : residualSd);
   const [intercept, slope] = [solved.coefficients[0] as number, solved.coefficients[1] as number];
@@ -38,10 +38,10 @@ export function buildLineFit(problem: LineProblem): LineFit {
     slopeInterval: around(slope, factor * errors.slopeSe),
     residualSd,
     degreesOfFreedom,
-    rSquared: solved.totalSquares > 0 ? 1 - solved.residualSquares / solved.totalSquares : null,
+    rSquared: solved.rSquared,
     meanX: solved.meanX,
     meanY: solved.meanY,
-    sxx: throughOrigin ? 1 / (solved.inverse[0]?.[0] as number) : solved.sxx,
+    rootSxx: solved.rootSxx,
     sumOfWeights: weights === null ? x.length : weights.reduce((sum, weight) => sum + weight, 0),
     throughOrigin,
     knownUncertainties: known,
@@ -53,23 +53,22 @@ export function buildLineFit(problem: LineProblem): LineFit {
 }
 
 function standardErrors(
-  { inverse }: PolynomialSolution,
+  { errorUnits, correlations }: PolynomialSolution,
   throughOrigin: boolean,
   unit: number,
 ): Pick<LineFit, 'interceptSe' | 'slopeSe' | 'covariance' | 'correlation'> {
-  const entry = (j: number, k: number) => inverse[j]?.[k] as number;
-  if (throughOrigin)
-    return { interceptSe: 0, slopeSe: unit * Math.sqrt(entry(0, 0)), covariance: 0, correlation: null };
-  const interceptSe = unit * Math.sqrt(entry(0, 0));
-  const slopeSe = unit * Math.sqrt(entry(1, 1));
-  const correlation = unit > 0 ? entry(0, 1) / Math.sqrt(entry(0, 0)) / Math.sqrt(entry(1, 1)) : null;
-  return { interceptSe, slopeSe, covariance: unit * unit * entry(0, 1) + 0, correlation };
+  const [first, second] = errorUnits.map((value) => value * unit) as [number, number];
+  if (throughOrigin) return { interceptSe: 0, slopeSe: first, covariance: 0, correlation: null };
+  const correlation = correlations[0]?.[1] as number;
+  const covariance = correlation * first * second + 0;
+  return { interceptSe: first, slopeSe: second, covariance, correlation: unit > 0 ? correlation : null };
 }
 
 function workingOf(fit: LineFit, { x, y, weights }: LineProblem) {
   const clause = METHOD_CLAUSES.leastSquares;
-  const { meanX, meanY, sxx, slope, intercept, residualSd, slopeSe, interceptSe, factor } = fit;
+  const { meanX, meanY, rootSxx, slope, intercept, residualSd, slopeSe, interceptSe, factor } = fit;
   const w = weights ?? x.map(() => 1);
+  const sxx = rootSxx ** 2;
   const aboutX = fit.throughOrigin ? 0 : meanX;
   const aboutY = fit.throughOrigin ? 0 : meanY;
   const unit = fit.knownUncertainties ? 1 : residualSd;

@@ -81,14 +81,15 @@ function checkOptions(fit: LineFit, y0: number, options: CalibrationInverseOptio
   return replicates;
 }
 
-/** Solves (e - b d)^2 = t^2 s^2 (1/m + 1/n + d^2/Sxx) for d = x - mean of x. */
+/** Solves (e - b d)^2 = t^2 s^2 (1/m + 1/n + d^2/Sxx) for d = x - mean of x, with all divided by b^2. */
 function fieller(fit: LineFit, e: number, replicates: number): Interval | null {
-  const { slope, sxx, factor, residualSd } = fit;
-  const spread = (factor * residualSd) ** 2;
-  const a = slope ** 2 - spread / sxx;
+  const { slope, rootSxx, factor, residualSd } = fit;
+  const spread = factor * (residualSd / Math.abs(slope));
+  const a = 1 - (spread / rootSxx) ** 2;
   if (!(a > 0)) return null;
   const share = 1 / replicates + (fit.throughOrigin ? 0 : 1 / fit.sumOfWeights);
-  const root = Math.sqrt(spread * (a * share + e ** 2 / sxx));
+  const away = e / slope;
+  const root = spread * Math.sqrt(a * share + (away / rootSxx) ** 2);
   const centre = fit.throughOrigin ? 0 : fit.meanX;
-  return { lower: centre + (slope * e - root) / a, upper: centre + (slope * e + root) / a };
+  return { lower: centre + (away - root) / a, upper: centre + (away + root) / a };
 }

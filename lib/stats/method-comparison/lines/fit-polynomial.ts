@@ -14,15 +14,17 @@ export interface PolynomialProblem {
 export interface PolynomialSolution {
   /** Of x^0, x^1 ...; without an intercept the first is 0. */
   readonly coefficients: readonly number[];
-  /** Inverse of X'WX for the powers that were fitted: the covariance of the coefficients per unit of variance. */
-  readonly inverse: readonly (readonly number[])[];
-  /** Weighted sum of squares of the residuals, and of y about its weighted mean (about 0 without an intercept). */
-  readonly residualSquares: number;
-  readonly totalSquares: number;
+  /** Standard error of each fitted coefficient per unit of residual sd, and their correlations. */
+  readonly errorUnits: readonly number[];
+  readonly correlations: readonly (readonly number[])[];
+  /** Root of the weighted sum of squared residuals. */
+  readonly residualSize: number;
+  /** About 0 without an intercept; null when y does not vary. */
+  readonly rSquared: number | null;
   readonly meanX: number;
   readonly meanY: number;
-  /** Weighted sum of squares of x about its weighted mean. */
-  readonly sxx: number;
+  /** Root of the weighted sum of squares of x about its weighted mean (about 0 without an intercept). */
+  readonly rootSxx: number;
 }
 
 type Row = readonly Wide[];
@@ -38,7 +40,8 @@ const ZERO = wide(0);
 export function fitPolynomial(problem: PolynomialProblem): PolynomialSolution {
   const scaleX = powerOfTwo(problem.x);
   const scaleY = powerOfTwo(problem.y);
-  const scaleW = problem.weights === null ? 1 : powerOfTwo(problem.weights);
+  // A power of four, so that its root is a power of two.
+  const scaleW = problem.weights === null ? 1 : powerOfTwo(problem.weights.map(Math.sqrt)) ** 2;
   const x = problem.x.map((value) => value / scaleX);
   const y = problem.y.map((value) => value / scaleY);
   const weights = problem.weights?.map((value) => value / scaleW) ?? null;
@@ -64,20 +67,25 @@ export function fitPolynomial(problem: PolynomialProblem): PolynomialSolution {
   const first = problem.intercept ? 0 : 1;
   const raw = shift.map((row, k) => narrow(dot(row, solution)) * unit(k + first));
   const spread = shift.map((row) => shift.map((other) => narrow(quadratic(row, inverse, other))));
+  const deviation = (k: number) => Math.sqrt(at(at(spread, k), k));
+  const residualSquares = narrow(total((i) => square(i, residual(i))));
+  const totalSquares = narrow(total((i) => square(i, minus(at(target, i), aboutY))));
+  const aboutX = problem.intercept ? meanX : ZERO;
+  const sxx = narrow(total((i) => square(i, minus(wide(at(x, i)), aboutX))));
+  const rootW = Math.sqrt(scaleW);
   return {
     coefficients: problem.intercept ? raw : [0, ...raw],
-    inverse: spread.map((row, j) =>
-      row.map((value, k) => (value * unit(j + first) * (unit(k + first) / scaleY / scaleY)) / scaleW),
-    ),
-    residualSquares: narrow(total((i) => square(i, residual(i)))) * scaleY * scaleY * scaleW,
-    totalSquares: narrow(total((i) => square(i, minus(at(target, i), aboutY)))) * scaleY * scaleY * scaleW,
+    errorUnits: shift.map((_, k) => deviation(k) / scaleX ** (k + first) / rootW),
+    correlations: spread.map((row, j) => row.map((value, k) => value / deviation(j) / deviation(k))),
+    residualSize: Math.sqrt(residualSquares) * scaleY * rootW,
+    rSquared: totalSquares > 0 ? 1 - residualSquares / totalSquares : null,
     meanX: narrow(meanX) * scaleX,
     meanY: narrow(meanY) * scaleY,
-    sxx: narrow(total((i) => square(i, minus(wide(at(x, i)), meanX)))) * scaleX * scaleX * scaleW,
+    rootSxx: Math.sqrt(sxx) * scaleX * rootW,
   };
 }
 
-/** The power of two just above the largest size, by which values are divided without loss. */
+/** The power of two just below the largest size, by which values are divided without loss. */
 function powerOfTwo(values: readonly number[]): number {
   const largest = values.reduce((size, value) => Math.max(size, Math.abs(value)), 0);
   return largest === 0 ? 1 : 2 ** Math.max(-1000, Math.floor(Math.log2(largest)));

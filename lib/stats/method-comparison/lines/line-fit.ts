@@ -22,8 +22,8 @@ export interface LineFit {
   readonly rSquared: number | null;
   readonly meanX: number;
   readonly meanY: number;
-  /** Weighted sum of squares of x about its mean (about 0 through the origin), and sum of the weights. */
-  readonly sxx: number;
+  /** Root of the weighted sum of squares of x about its mean (about 0 through the origin), and sum of the weights. */
+  readonly rootSxx: number;
   readonly sumOfWeights: number;
   readonly throughOrigin: boolean;
   /** True when the standard errors come from stated uncertainties and not from the residuals. */

@@ -49,14 +49,14 @@ export function polynomialLeastSquares(
   checkPairs(caller, x, y, degree + 2);
   const solved = fitPolynomial({ caller, x, y, weights: null, degree, intercept: true });
   const degreesOfFreedom = x.length - degree - 1;
-  const residualSd = Math.sqrt(solved.residualSquares / degreesOfFreedom);
-  const standardErrors = solved.inverse.map((row, k) => residualSd * Math.sqrt(row[k] as number));
+  const residualSd = solved.residualSize / Math.sqrt(degreesOfFreedom);
+  const standardErrors = solved.errorUnits.map((value) => residualSd * value);
   return {
     degree,
     coefficients: solved.coefficients.map((value) => representable(caller, value)),
     standardErrors: standardErrors.map((value) => representable(caller, value)),
     residualSd: representable(caller, residualSd),
     degreesOfFreedom,
-    rSquared: solved.totalSquares > 0 ? 1 - solved.residualSquares / solved.totalSquares : null,
+    rSquared: solved.rSquared,
   };
 }

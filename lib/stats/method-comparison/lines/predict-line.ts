@@ -40,7 +40,7 @@ export function predictLine(
   }
   const unit = fit.knownUncertainties ? 1 : fit.residualSd;
   const away = fit.throughOrigin ? x : x - fit.meanX;
-  const share = (fit.throughOrigin ? 0 : 1 / fit.sumOfWeights) + (away / fit.sxx) * away;
+  const share = (fit.throughOrigin ? 0 : 1 / fit.sumOfWeights) + (away / fit.rootSxx) ** 2;
   const fitted = fit.throughOrigin ? fit.slope * x : fit.meanY + fit.slope * away;
   const standardError = unit * Math.sqrt(share);
   const single = unit * Math.sqrt(share + 1 / replicates);

@@ -31,7 +31,7 @@ export interface DifferencePowerInput {
  *
  * Numerics: noncentral t distribution, both tails. Source: Cohen 1988, Statistical Power Analysis, ch. 2.
  * Checked by: tests/stats/method-comparison/planning.test.ts (base R power.t.test).
- * @example differencePower({ count: 20, sd: 1, difference: 0.66 }) // => 0.8
+ * @example differencePower({ count: 20, sd: 1, difference: 0.66 }) // => 0.7995
  */
 export function differencePower({ count, sd, difference, alpha = 0.05 }: DifferencePowerInput): number {
   const caller = 'differencePower';
@@ -69,7 +69,7 @@ export interface EquivalencePowerInput {
  * Numerics: exact for normal differences, by integrating over the standard deviation found (1e-10).
  * Source: Phillips 1990, J Pharmacokinet Biopharm 18, 137-144.
  * Checked by: tests/stats/method-comparison/planning.test.ts (base R integrate).
- * @example equivalencePower({ count: 12, sd: 1, margin: 1 }) // => 0.8998
+ * @example equivalencePower({ count: 12, sd: 1, margin: 1 }) // => 0.8894
  */
 export function equivalencePower(input: EquivalencePowerInput): number {
   const caller = 'equivalencePower';

@@ -1,5 +1,6 @@
+import { StatsError } from '../../stats-error';
 import type { Bracket, Pivot } from './pivot-order';
-import { between, clearlyBelow, sampleSize, SlopeSample, type SlopeRanks } from './slope-ranks';
+import { MOST_ROUNDS, between, clearlyBelow, sampleSize, SlopeSample, type SlopeRanks } from './slope-ranks';
 
 /** Brackets at a size of slope: at minus that slope and at plus that slope. */
 interface SizeBracket {
@@ -23,7 +24,7 @@ export function selectAbsoluteSlope(ranks: SlopeRanks, rank: number): number {
   if (rank < flat.equal) return 0;
   let lower: SizeBracket = { minus: flat, plus: flat, below: 0, equal: flat.equal };
   let upper: SizeBracket = { minus: first, plus: last, below: ranks.total, equal: 0 };
-  for (;;) {
+  for (let round = 0; round < MOST_ROUNDS; round += 1) {
     const before = lower.below + lower.equal;
     const inside = upper.below - before;
     if (inside <= ranks.listLimit) return listedSizes(ranks, lower, upper)[rank - before] as number;
@@ -36,6 +37,7 @@ export function selectAbsoluteSlope(ranks: SlopeRanks, rank: number): number {
       } else if (made.below + made.equal > lower.below + lower.equal) lower = made;
     }
   }
+  throw new StatsError('no-convergence', `the size of slope with rank ${rank + 1} was not found`);
 }
 
 function sizeBracketAt(

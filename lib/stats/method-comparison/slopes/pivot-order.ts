@@ -93,8 +93,9 @@ function keysAcross(points: OrderedPoints, pivot: Pivot): { keys: Float64Array; 
   const keys = new Float64Array(count);
   for (let i = 0; i < count; i += 1) keys[i] = (y[i] as number) * run - (x[i] as number) * rise;
   // A rounding in each centred value, two in the pivot, two products, one difference, each 2^-53 of the size: 2^-48
-  // covers both keys.
-  const bound = 2 ** -48 * (largest.y * run + largest.x * Math.abs(rise)) + 2 ** -1000;
+  // covers both keys. A pivot or product that falls below the normal numbers is off by half of 2^-1074.
+  const underflow = 2 ** -1070 * (1 + largest.x + largest.y);
+  const bound = 2 ** -48 * (largest.y * run + largest.x * Math.abs(rise)) + underflow;
   return { keys, tolerance: exact ? 0 : bound };
 }
 

@@ -1,3 +1,4 @@
+import { StatsError } from '../../stats-error';
 import { bracketAt, type Bracket, type Pivot } from './pivot-order';
 import type { OrderedPoints } from './point-grid';
 import { seededGenerator } from './seeded-generator';
@@ -11,6 +12,8 @@ export interface SlopeRanksOptions {
 const SEED = 20_261_201;
 // A sample quantile lies within 2.3 standard deviations with 98 %; a miss costs one round more and nothing else.
 const MARGIN = 2.3;
+// Two or three are usual. Every round takes a pair out, so the limit is a guard against a fault here.
+export const MOST_ROUNDS = 10_000;
 const SMALLEST_LIST = 2_000;
 
 /**
@@ -59,7 +62,7 @@ export class SlopeRanks {
 
   /** The slope with the given rank among all, from 0. */
   select(rank: number): number {
-    for (;;) {
+    for (let round = 0; round < MOST_ROUNDS; round += 1) {
       const [lower, upper] = this.around(rank);
       if (lower === upper) return lower.slope;
       const inside = between(lower, upper);
@@ -68,6 +71,7 @@ export class SlopeRanks {
       }
       this.contract(lower, upper, (rank - lower.below - lower.equal + 0.5) / inside);
     }
+    throw new StatsError('no-convergence', `the slope with rank ${rank + 1} was not found`);
   }
 
   /** The closest brackets that enclose the rank; twice the same when the rank is one of its equal slopes. */
