@@ -1,31 +1,26 @@
 import type { PairSet } from './difference-distribution';
 import { justAbove, justBelow } from './neighbours';
-import { countDifferences, locateDifference } from './pair-differences';
+import { locateDifference, type Wanted } from './locate-difference';
+import { countDifferences, remembering } from './pair-differences';
 
-interface Staircase {
-  readonly sorted: Float64Array;
-  readonly measure: (t: number) => number;
-  readonly total: number;
-  readonly tolerance: number;
-  /** Which pairs count; null when all do and each weighs 1. */
-  readonly counts: ((i: number, j: number) => boolean) | null;
-}
+type Staircase = Omit<Wanted, 'target'> & { readonly sorted: Float64Array; readonly tolerance: number };
 
 /** All pairs of single values. */
 export function allPairs(sorted: Float64Array, tolerance: number): PairSet {
   const n = sorted.length;
-  const measure = (t: number) => countDifferences(sorted, t);
-  return staircasePairs({ sorted, measure, total: (n * (n - 1)) / 2, tolerance, counts: null });
+  const count = remembering((t) => countDifferences(sorted, t));
+  const total = (n * (n - 1)) / 2;
+  return staircasePairs({ sorted, measure: count, count, total, tolerance, counts: null, single: true });
 }
 
 /** Pairs of a sorted list that are too many to be written down. */
-export function staircasePairs({ sorted, measure, total, tolerance, counts }: Staircase): PairSet {
+export function staircasePairs({ sorted, tolerance, ...pairs }: Staircase): PairSet {
+  const { measure, total, counts, single } = pairs;
   return {
     measure,
     total,
     tolerance,
-    locate: (target) =>
-      locateDifference(sorted, { target: counts === null ? Math.ceil(target) : target, measure }),
+    locate: (target) => locateDifference(sorted, { ...pairs, target: single ? Math.ceil(target) : target }),
     largestBelow: (t) => largestBelow(sorted, t, counts ?? always),
     smallestAbove: (t) => smallestAbove(sorted, t, counts ?? always),
   };

@@ -1,5 +1,5 @@
 import { checkValues, representable } from '../internal/check-values';
-import { kthDifference } from '../internal/pair-differences';
+import { kthDifference } from '../internal/locate-difference';
 import { sortedCopy } from '../internal/sorted';
 import { safeFactor } from '../internal/sums';
 
@@ -31,7 +31,7 @@ const SMALL = [
  *   result is too large to represent
  *
  * Ties and equal values: allowed; 0 when a quarter of all pairs are ties. Order of input: does not matter.
- * Numerics: exact order statistic, O(n log n) time, O(n) memory (see pair-differences).
+ * Numerics: exact order statistic, O(n log n) time, O(n) memory (see locate-difference).
  * Source: Rousseeuw and Croux 1993, JASA 88, 1273-1283; Croux and Rousseeuw 1992, COMPSTAT 1, 411-428; ISO 13528:2022,
  *   Annex C.5.5; factors of R package robustbase 0.93 and later.
  * Checked by: tests/stats/location-scale/qn-sn.test.ts, tests/reference/proficiency (estimators).

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { qn, sn } from '@/lib/stats';
-import { kthDifference } from '@/lib/stats/internal/pair-differences';
+import { kthDifference } from '@/lib/stats/internal/locate-difference';
 import { selectKth } from '@/lib/stats/internal/select-kth';
 import { expectClose } from '../expect-close';
 import { codeOf } from '../hostile';
