@@ -1,7 +1,8 @@
 import { normalSurvival } from '../../distributions';
+import { spreadOrder } from '../../internal/spread-order';
 import { StatsError } from '../../stats-error';
 import { checkPairs } from '../internal/check-pairs';
-import { mergeOrder } from '../slopes/merge-order';
+import { CountTree } from '../slopes/minus-one';
 import { kendallExactProbability } from './kendall-exact';
 
 export interface KendallResult {
@@ -30,7 +31,7 @@ const EXACT_BELOW = 50;
  *
  * Ties and equal values: counted apart; the variance allows for them. Probability: exact without ties below 50 pairs,
  *   else the normal approximation. Order of input: does not matter.
- * Numerics: inversions by merge sort, O(n log n); exact distribution O(n^3) at n < 50.
+ * Numerics: inversions by sums over ranks, O(n log n); exact distribution O(n^3) at n < 50.
  * Source: Kendall 1970, Rank Correlation Methods, ch. 3 to 5; Knight 1966, J Am Stat Assoc 61, 436-439.
  * Checked by: tests/reference/method-comparison (tuna, sen1968, pefr), tests/stats/method-comparison/correlation.test.ts.
  * @example kendall([1, 2, 3, 4], [1, 3, 2, 4]).coefficient // => 0.6667
@@ -39,12 +40,13 @@ export function kendall(x: readonly number[], y: readonly number[]): KendallResu
   const caller = 'kendall';
   checkPairs(caller, x, y, 2);
   const n = x.length;
-  const byX = orderByBoth(x, y);
-  const inX = tiesOf(Array.from(byX, (i) => x[i] as number));
-  const both = tiesOf(byX, (a, b) => x[a] === x[b] && y[a] === y[b]);
-  const { order, inversions: discordant } = mergeOrder(Float64Array.from(byX, (i) => y[i] as number));
-  const sortedY = Array.from(order, (at) => y[byX[at] as number] as number);
-  const inY = tiesOf(sortedY);
+  const { byX, rankOfY, sortedY } = orderByBoth(x, y);
+  const inX = tiesOf(n, (a, b) => x[byX[a] as number] === x[byX[b] as number]);
+  const inY = tiesOf(n, (a, b) => sortedY[a] === sortedY[b]);
+  const inBoth = (a: number, b: number) =>
+    x[byX[a] as number] === x[byX[b] as number] && y[byX[a] as number] === y[byX[b] as number];
+  const both = inX.pairs > 0 && inY.pairs > 0 ? tiesOf(n, inBoth) : NO_TIES;
+  const discordant = countDiscordant(byX, rankOfY);
   const pairs = (n * (n - 1)) / 2;
   const tied = inX.pairs + inY.pairs - both.pairs;
   const concordant = pairs - tied - discordant;
@@ -65,11 +67,42 @@ export function kendall(x: readonly number[], y: readonly number[]): KendallResu
   };
 }
 
-/** Places by x, equal x by y. */
-function orderByBoth(x: readonly number[], y: readonly number[]): Int32Array {
-  const byY = mergeOrder(Float64Array.from(y)).order;
-  const { order } = mergeOrder(Float64Array.from(byY, (i) => x[i] as number));
-  return order.map((at) => byY[at] as number);
+interface Ordered {
+  /** Places by x, equal x by y. */
+  readonly byX: Uint32Array;
+  /** Of each place, from 1; equal values share it. */
+  readonly rankOfY: Int32Array;
+  readonly sortedY: Float64Array;
+}
+
+function orderByBoth(x: readonly number[], y: readonly number[]): Ordered {
+  const n = x.length;
+  const byY = spreadOrder(Float64Array.from(y));
+  const sortedY = new Float64Array(n);
+  const xByY = new Float64Array(n);
+  const rankOfY = new Int32Array(n);
+  for (let at = 0, rank = 0; at < n; at += 1) {
+    const place = byY[at] as number;
+    sortedY[at] = y[place] as number;
+    xByY[at] = x[place] as number;
+    if (at === 0 || sortedY[at] !== sortedY[at - 1]) rank += 1;
+    rankOfY[place] = rank;
+  }
+  const byX = spreadOrder(xByY);
+  for (let at = 0; at < n; at += 1) byX[at] = byY[byX[at] as number] as number;
+  return { byX, rankOfY, sortedY };
+}
+
+/** Pairs in the order of x in which a larger y comes first. */
+function countDiscordant(byX: Uint32Array, rankOfY: Int32Array): number {
+  const seen = new CountTree(byX.length);
+  let discordant = 0;
+  for (let at = 0; at < byX.length; at += 1) {
+    const rank = rankOfY[byX[at] as number] as number;
+    discordant += at - seen.upTo(rank);
+    seen.add(rank);
+  }
+  return discordant;
 }
 
 /** Sums over runs of equal values: pairs, and the terms of the variance. */
@@ -79,11 +112,14 @@ interface Ties {
   readonly weighted: number;
 }
 
-function tiesOf<T>(sorted: ArrayLike<T>, same = (a: T, b: T) => a === b): Ties {
+const NO_TIES: Ties = { pairs: 0, triples: 0, weighted: 0 };
+
+/** Runs of places in order that are the same. */
+function tiesOf(n: number, same: (a: number, b: number) => boolean): Ties {
   let [pairs, triples, weighted] = [0, 0, 0];
-  for (let start = 0; start < sorted.length;) {
+  for (let start = 0; start < n; ) {
     let end = start + 1;
-    while (end < sorted.length && same(sorted[end] as T, sorted[start] as T)) end += 1;
+    while (end < n && same(end, start)) end += 1;
     const t = end - start;
     pairs += (t * (t - 1)) / 2;
     triples += t * (t - 1) * (t - 2);

@@ -7,7 +7,7 @@ import { scalePairs } from '../internal/scale-pairs';
 import type { DemingOptions } from './deming';
 import { analyticErrors } from './deming-errors';
 import { demingLine, requireLine, type CentredSums, type SlopeAndIntercept } from './deming-slope';
-import { errorSteps } from './deming-working';
+import { weightedDemingWorking } from './deming-working';
 import { errorsKindOf, finishLine, type ErrorsInVariablesLine } from './errors-in-variables';
 import { jackknifeErrors, type JackknifeErrors } from './jackknife-line';
 
@@ -36,7 +36,7 @@ interface State extends SlopeAndIntercept {
  * @param options.errorRatio - variance of the error of y over that of x. Domain: > 0. Default 1.
  * @param options.standardErrors - 'jackknife' (default) or 'analytic' (with the last weights; normal data, large n).
  * @param options.confidence - of the t intervals with n - 2 degrees of freedom. Default 0.95.
- * @param options.working - give the steps of the limits. Default false.
+ * @param options.working - give the steps of the last round. Default false.
  * @returns ErrorsInVariablesLine, with the number of iterations
  * @throws StatsError as deming; out-of-domain when a level is not above 0; no-convergence
  *
@@ -84,7 +84,7 @@ export function weightedDeming(
     confidence,
     iterations,
   });
-  return options.working ? { ...fit, working: errorSteps(fit) } : fit;
+  return options.working ? { ...fit, working: weightedDemingWorking(fit, x, y) } : fit;
 }
 
 function jackknife(problem: Problem, from: SlopeAndIntercept): JackknifeErrors {

@@ -43,7 +43,7 @@ export function kappa(table: TwoByTwo, options: ConfidenceOptions = {}): Kappa {
   const d = table.bothNegative / n;
   const first = a + b;
   const second = a + c;
-  const agreement = a + d;
+  const agreement = (table.bothPositive + table.bothNegative) / n;
   const expected = first * second + (1 - first) * (1 - second);
   const ofOneKind = table.bothPositive === n || table.bothNegative === n;
   if (ofOneKind) return { agreement, expected: 1, kappa: null, standardError: null, interval: null };

@@ -34,14 +34,16 @@ export function orderPoints(x: readonly number[], y: readonly number[]): Ordered
   const decimal = step !== null;
   const unit = step ?? 1 / binaryFactor(x, y);
   const place = (value: number) => (decimal ? Math.round(value * unit) : value / unit) + 0;
-  const source = orderOf(x, y);
+  // Ordered as placed: shrinking can make the smallest numbers equal.
+  const placedX = Float64Array.from(x, place);
+  const placedY = Float64Array.from(y, place);
+  const source = orderOf(placedX, placedY);
   const count = source.length;
   const px = new Float64Array(count);
   const py = new Float64Array(count);
   for (let i = 0; i < count; i += 1) {
-    const at = source[i] as number;
-    px[i] = place(x[at] as number);
-    py[i] = place(y[at] as number);
+    px[i] = placedX[source[i] as number] as number;
+    py[i] = placedY[source[i] as number] as number;
   }
   const centredX = centred(px, decimal);
   const centredY = centred(py, decimal);
@@ -74,8 +76,8 @@ function binaryFactor(x: readonly number[], y: readonly number[]): number {
 }
 
 /** Order by x, equal x by y, equal points by place in the input. */
-function orderOf(x: readonly number[], y: readonly number[]): Int32Array {
-  const { order } = mergeOrder(Float64Array.from(x));
+function orderOf(x: Float64Array, y: Float64Array): Int32Array {
+  const { order } = mergeOrder(x);
   const n = order.length;
   const byY = (a: number, b: number) => (y[a] as number) - (y[b] as number) || a - b;
   for (let start = 0; start < n;) {
