@@ -117,7 +117,7 @@ const NO_TIES: Ties = { pairs: 0, triples: 0, weighted: 0 };
 /** Runs of places in order that are the same. */
 function tiesOf(n: number, same: (a: number, b: number) => boolean): Ties {
   let [pairs, triples, weighted] = [0, 0, 0];
-  for (let start = 0; start < n; ) {
+  for (let start = 0; start < n;) {
     let end = start + 1;
     while (end < n && same(end, start)) end += 1;
     const t = end - start;

@@ -68,8 +68,8 @@ export function fitPolynomial(problem: PolynomialProblem): PolynomialSolution {
   const raw = shift.map((row, k) => narrow(dot(row, solution)) * unit(k + first));
   const spread = shift.map((row) => shift.map((other) => narrow(quadratic(row, inverse, other))));
   const deviation = (k: number) => Math.sqrt(at(at(spread, k), k));
-  const residualSquares = narrow(total((i) => square(i, residual(i))));
-  const totalSquares = narrow(total((i) => square(i, minus(at(target, i), aboutY))));
+  const residualSquares = total((i) => square(i, residual(i)));
+  const totalSquares = total((i) => square(i, minus(at(target, i), aboutY)));
   const aboutX = problem.intercept ? meanX : ZERO;
   const sxx = narrow(total((i) => square(i, minus(wide(at(x, i)), aboutX))));
   const rootW = Math.sqrt(scaleW);
@@ -77,8 +77,10 @@ export function fitPolynomial(problem: PolynomialProblem): PolynomialSolution {
     coefficients: problem.intercept ? raw : [0, ...raw],
     errorUnits: shift.map((_, k) => deviation(k) / scaleX ** (k + first) / rootW),
     correlations: spread.map((row, j) => row.map((value, k) => value / deviation(j) / deviation(k))),
-    residualSize: Math.sqrt(residualSquares) * scaleY * rootW,
-    rSquared: totalSquares > 0 ? 1 - residualSquares / totalSquares : null,
+    residualSize: Math.sqrt(narrow(residualSquares)) * scaleY * rootW,
+    // Subtracted with all figures, so that a small share explained keeps its digits.
+    rSquared:
+      narrow(totalSquares) > 0 ? narrow(over(minus(totalSquares, residualSquares), totalSquares)) : null,
     meanX: narrow(meanX) * scaleX,
     meanY: narrow(meanY) * scaleY,
     rootSxx: Math.sqrt(sxx) * scaleX * rootW,

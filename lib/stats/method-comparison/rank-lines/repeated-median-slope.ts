@@ -1,4 +1,5 @@
-import { medianOfSorted } from '../../internal/sorted';
+import { selectKth } from '../../internal/select-kth';
+import { medianOf } from '../internal/median-of';
 import { CountTree } from '../slopes/minus-one';
 import type { OrderedPoints } from '../slopes/point-grid';
 import { SlopeRanks } from '../slopes/slope-ranks';
@@ -66,14 +67,17 @@ class InnerMedians {
         left = left.filter((i) => side(i) > 0);
       }
     }
-    return Float64Array.from(left, (i) => this.medianOf(i)).sort()[at] as number;
+    return selectKth(
+      Float64Array.from(left, (i) => this.medianOf(i)),
+      at,
+    );
   }
 
-  /** Median of the slopes from one point to all others with different x: O(n log n), kept. */
+  /** Median of the slopes from one point to all others with different x: O(n), kept. */
   private medianOf(i: number): number {
     const known = this.known.get(i);
     if (known !== undefined) return known;
-    const median = medianOfSorted(this.slopesOf(i).sort());
+    const median = medianOf(this.slopesOf(i));
     this.known.set(i, median);
     return median;
   }

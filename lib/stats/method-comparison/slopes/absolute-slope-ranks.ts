@@ -1,3 +1,4 @@
+import { selectKth } from '../../internal/select-kth';
 import { StatsError } from '../../stats-error';
 import type { Bracket, Pivot } from './pivot-order';
 import { MOST_ROUNDS, between, clearlyBelow, sampleSize, SlopeSample, type SlopeRanks } from './slope-ranks';
@@ -27,7 +28,7 @@ export function selectAbsoluteSlope(ranks: SlopeRanks, rank: number): number {
   for (let round = 0; round < MOST_ROUNDS; round += 1) {
     const before = lower.below + lower.equal;
     const inside = upper.below - before;
-    if (inside <= ranks.listLimit) return listedSizes(ranks, lower, upper)[rank - before] as number;
+    if (inside <= ranks.listLimit) return selectKth(listedSizes(ranks, lower, upper), rank - before);
     const sample = sampleSizes(ranks, lower, upper);
     for (const pivot of sample.around((rank - before + 0.5) / inside)) {
       const made = sizeBracketAt(ranks, pivot, lower.plus, upper.minus);
@@ -61,7 +62,7 @@ function listedSizes(ranks: SlopeRanks, lower: SizeBracket, upper: SizeBracket):
   const sizes = new Float64Array(falling.length + rising.length);
   sizes.set(rising);
   for (let i = 0; i < falling.length; i += 1) sizes[rising.length + i] = Math.abs(falling[i] as number);
-  return sizes.sort();
+  return sizes;
 }
 
 /** A sample from the two intervals, each by its share of the pairs. */

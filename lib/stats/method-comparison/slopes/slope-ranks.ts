@@ -1,3 +1,4 @@
+import { selectKth } from '../../internal/select-kth';
 import { StatsError } from '../../stats-error';
 import { bracketAt, type Bracket, type Pivot } from './pivot-order';
 import type { OrderedPoints } from './point-grid';
@@ -67,7 +68,7 @@ export class SlopeRanks {
       if (lower === upper) return lower.slope;
       const inside = between(lower, upper);
       if (inside <= this.listLimit) {
-        return this.listed(lower, upper)[rank - lower.below - lower.equal] as number;
+        return selectKth(this.listed(lower, upper), rank - lower.below - lower.equal);
       }
       this.contract(lower, upper, (rank - lower.below - lower.equal + 0.5) / inside);
     }
@@ -107,7 +108,7 @@ export class SlopeRanks {
     forTurnedPairs(lower.asLower, upper.asUpper, targets, (a, b) => sample.add(a, b));
   }
 
-  /** All slopes strictly between two brackets, sorted. */
+  /** All slopes strictly between two brackets, in no order; kept, and rearranged by each selection. */
   listed(lower: Bracket, upper: Bracket): Float64Array {
     const known = this.lists.get(lower);
     if (known?.upper === upper) return known.slopes;
@@ -118,7 +119,6 @@ export class SlopeRanks {
       slopes[at] = ((y[b] as number) - (y[a] as number)) / ((x[b] as number) - (x[a] as number));
       at += 1;
     });
-    slopes.sort();
     this.lists.set(lower, { upper, slopes });
     return slopes;
   }
@@ -172,14 +172,14 @@ export class SlopeSample {
   /** Pivots that very likely lie on either side of the quantile of the interval; one when they are the same. */
   around(share: number): Pivot[] {
     const m = this.size;
-    const sorted = this.slopes.slice(0, m).sort();
+    const copy = this.slopes.slice(0, m);
     const margin = MARGIN * Math.sqrt(m * share * (1 - share)) + 1;
     const low = Math.floor(share * m - margin);
     const high = Math.ceil(share * m + margin);
     const wanted = new Set<number>();
-    if (low >= 0) wanted.add(sorted[low] as number);
-    if (high < m) wanted.add(sorted[high] as number);
-    if (wanted.size === 0) wanted.add(sorted[m >> 1] as number);
+    if (low >= 0) wanted.add(selectKth(copy, low));
+    if (high < m) wanted.add(selectKth(copy, high));
+    if (wanted.size === 0) wanted.add(selectKth(copy, m >> 1));
     return [...wanted].map((slope) => this.pivotOf(this.slopes.indexOf(slope)));
   }
 
