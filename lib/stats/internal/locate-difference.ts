@@ -39,7 +39,7 @@ interface Bracket {
 }
 
 /** So few differences are simply listed. */
-const FEW = 4096;
+const FEW = 1024;
 
 /**
  * The smallest difference whose measure reaches the target. A bracket of differences is kept that holds it; a regular
@@ -94,7 +94,7 @@ const LARGEST_SAMPLE = 16_384;
 /** Every so many differences inside the bracket, in the order of rows; sorted by size. */
 function sampleInside(sorted: Float64Array, bracket: Bracket, inside: number): Float64Array {
   const n = sorted.length;
-  const size = Math.round(Math.max(256, 8 * Math.sqrt(n), Math.min(n / 8, LARGEST_SAMPLE)));
+  const size = Math.round(Math.max(128, 8 * Math.sqrt(n), Math.min(n / 8, LARGEST_SAMPLE)));
   const stride = inside / size;
   const sample = new Float64Array(size);
   let taken = 0;

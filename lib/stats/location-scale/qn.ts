@@ -41,7 +41,7 @@ export function qn(values: readonly number[], options: QnOptions = {}): number {
   checkValues('qn', values, 2);
   const n = values.length;
   const sorted = sortedCopy(values);
-  const factor = safeFactor(sorted);
+  const factor = safeFactor([sorted[0] as number, sorted[sorted.length - 1] as number]);
   if (factor !== 1) sorted.forEach((value, i) => (sorted[i] = value * factor));
   const h = Math.floor(n / 2) + 1;
   const distance = kthDifference(sorted, (h * (h - 1)) / 2) / factor;

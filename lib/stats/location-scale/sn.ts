@@ -35,7 +35,7 @@ const SMALL = [0.743, 1.851, 0.954, 1.351, 0.993, 1.198, 1.005, 1.131] as const;
 export function sn(values: readonly number[], options: SnOptions = {}): number {
   checkValues('sn', values, 2);
   const sorted = sortedCopy(values);
-  const factor = safeFactor(sorted);
+  const factor = safeFactor([sorted[0] as number, sorted[sorted.length - 1] as number]);
   if (factor !== 1) sorted.forEach((value, i) => (sorted[i] = value * factor));
   const n = sorted.length;
   const inner = highMedians(sorted);
@@ -50,10 +50,18 @@ function highMedians(sorted: Float64Array): Float64Array {
   const h = Math.floor(n / 2) + 1;
   const medians = new Float64Array(n);
   let left = 0;
+  let low = sorted[0] as number;
+  let high = sorted[h - 1] as number;
+  let next = h < n ? (sorted[h] as number) : Infinity;
   for (let i = 0; i < n; i += 1) {
     const x = sorted[i] as number;
-    while (left + h < n && (sorted[left + h] as number) - x < x - (sorted[left] as number)) left += 1;
-    medians[i] = Math.max(x - (sorted[left] as number), (sorted[left + h - 1] as number) - x);
+    while (next - x < x - low) {
+      left += 1;
+      low = sorted[left] as number;
+      high = next;
+      next = left + h < n ? (sorted[left + h] as number) : Infinity;
+    }
+    medians[i] = x - low > high - x ? x - low : high - x;
   }
   return medians;
 }
