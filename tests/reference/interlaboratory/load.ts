@@ -47,6 +47,13 @@ export function loadRoundChecks(): readonly RoundCheck[] {
   return (JSON.parse(read('rounds-and-trials.checks.json')) as { checks: RoundCheck[] }).checks;
 }
 
+/** Checks kept beside the estimators that functions for rounds and trials must meet too. */
+export function loadSharedChecks(): readonly RoundCheck[] {
+  const { checks } = JSON.parse(read('../proficiency/estimators.json')) as { checks: RoundCheck[] };
+  const shared = /^(q_method|q_hampel_x|rsz|ssz|count_abs_gt)$/;
+  return checks.filter(({ id, method }) => shared.test(method) && /^(creosote|antibody|allergen)/.test(id));
+}
+
 export function loadTrialChecks(name: string): readonly TrialCheck[] {
   return (JSON.parse(read(`${name}.checks.json`)) as { checks: TrialCheck[] }).checks;
 }

@@ -1,6 +1,4 @@
 import {
-  algorithmA,
-  algorithmS,
   cochranCritical,
   cochranTest,
   cusumChart,
@@ -13,16 +11,13 @@ import {
   hampel,
   homogeneity,
   homogeneityFactors,
-  horRat,
   laboratoryOverRounds,
   lagOneAutocorrelation,
   mandelCritical,
   mandelStatistics,
-  mean,
   oneWayAnova,
   precision,
   robustPrecision,
-  sd,
   shewhartChart,
   tietjenMoore,
 } from '@/lib/stats';
@@ -58,7 +53,6 @@ class Facts {
 
 type Recipe = (facts: Facts) => number;
 
-const LEVEL_OF_UNIT = (fraction: number) => ({ assignedValue: fraction, massFractionPerUnit: 1 });
 const cusum = (facts: Facts) => {
   const chart = cusumChart(facts.values, { target: facts.number('target'), allowance: facts.number('k') });
   return chart.points[facts.number('i') - 1];
@@ -70,22 +64,12 @@ const ewmaLimits = (facts: Facts) =>
 const soya = (facts: Facts, sigmaPt = 1) => homogeneity({ items: facts.groups, sigmaPt });
 const mandelOf = (facts: Facts) =>
   mandelStatistics(facts.groups).laboratories[[...facts.byGroup.keys()].indexOf(String(facts.number('lab')))];
-const horRatBy = (facts: Facts, prediction: 'horwitz' | 'horwitz-thompson') =>
-  horRat(
-    {
-      standardDeviation: (facts.number('rsdR') / 100) * facts.number('C'),
-      ...LEVEL_OF_UNIT(facts.number('C')),
-    },
-    { prediction },
-  );
 const limits = (facts: Facts, replicates: number) =>
   mandelCritical({ laboratories: facts.number('p'), replicates, alpha: facts.number('alpha') });
 const robustly = (facts: Facts) => robustPrecision(facts.groups, { method: 'q-and-hampel' });
 const singles = (facts: Facts) => hampel(facts.values);
 
 const RECIPES: Readonly<Record<string, Recipe>> = {
-  mean: ({ values }) => mean(values),
-  sd: ({ values }) => sd(values),
   acf1: ({ values }) => lagOneAutocorrelation(values),
   n: ({ values }) => laboratoryOverRounds(values).rounds,
   rsz: ({ values }) => laboratoryOverRounds(values).rescaledSum,
@@ -103,9 +87,6 @@ const RECIPES: Readonly<Record<string, Recipe>> = {
   },
   ewma_ucl: (facts) => ewmaLimits(facts).finalUpper,
   ewma_lcl: (facts) => ewmaLimits(facts).finalLower,
-  algA_x: ({ values }) => algorithmA(values).location,
-  algA_s: ({ values }) => algorithmA(values).scale,
-  algS_w: (facts) => algorithmS(facts.values, { degreesOfFreedom: facts.number('nu') }).pooled,
   q_method: (facts) => (facts.grouped ? robustly(facts).reproducibilitySd : singles(facts).scale),
   q_hampel_x: (facts) => (facts.grouped ? robustly(facts).mean : singles(facts).location),
   anova_ssb: ({ groups }) => oneWayAnova(groups).betweenSquares,
@@ -160,8 +141,6 @@ const RECIPES: Readonly<Record<string, Recipe>> = {
   esd_count: (facts) =>
     generalisedEsd(facts.values, { maxOutliers: facts.number('r'), alpha: facts.number('alpha') }).outliers,
   tietjen_E: (facts) => tietjenMoore(facts.values, facts.number('k')).statistic,
-  horrat: (facts) => horRatBy(facts, 'horwitz'),
-  horrat_trunc: (facts) => horRatBy(facts, 'horwitz-thompson'),
 };
 
 export function compute(check: RoundCheck): number {
