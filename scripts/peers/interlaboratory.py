@@ -69,11 +69,12 @@ def case(kind, x):
     return out
 
 
-print(json.dumps({
-    "source": "random data, seed 20261201 (PCG64)",
-    "program": f"scipy {scipy.__version__}, numpy {np.__version__}",
-    "script": "scripts/peers/interlaboratory.py",
-    "madeOn": "2026-12-01",
-    "tolerance": "relative 1e-9",
-    "cases": [case(kind, x) for n in SIZES for kind, x in samples(n)],
-}, separators=(",", ":")))
+if __name__ == "__main__":
+    print(json.dumps({
+        "source": "random data, seed 20261201 (PCG64)",
+        "program": f"scipy {scipy.__version__}, numpy {np.__version__}",
+        "script": "scripts/peers/interlaboratory.py",
+        "madeOn": "2026-12-01",
+        "tolerance": "relative 1e-9",
+        "cases": [case(kind, x) for n in SIZES for kind, x in samples(n)],
+    }, separators=(",", ":")))
