@@ -44,7 +44,7 @@ function note(peer, entry, comparison) {
 }
 
 const failed = [...rows.values()].filter(({ worst }) => !(worst.difference <= worst.tolerance));
-const columns = [34, 12, 7, 12, 11];
+const columns = [37, 12, 7, 12, 11];
 const print = (cells) => console.log(cells.map((cell, i) => String(cell).padEnd(columns[i] ?? 0)).join(''));
 print(['Function and figure', 'Peer', 'Cases', 'Worst', 'Tolerance', 'Verdict']);
 for (const row of rows.values()) {
