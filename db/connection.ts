@@ -1,5 +1,7 @@
 import 'server-only';
 import knex, { type Knex } from 'knex';
+import path from 'node:path';
+import { DATABASE_FILE, dataDirectory } from '@/lib/env';
 import { knexConfig } from './config';
 
 export type Db = Knex;
@@ -10,4 +12,9 @@ const holder = globalThis as typeof globalThis & { assizeDb?: Knex };
 export function db(): Db {
   holder.assizeDb ??= knex(knexConfig());
   return holder.assizeDb;
+}
+
+/** The file behind db(), for a connection in another thread. */
+export function databaseFile(): string {
+  return path.join(dataDirectory(), DATABASE_FILE);
 }

@@ -1,4 +1,5 @@
 import 'server-only';
+import { setImmediate } from 'node:timers/promises';
 import { timestamp } from './clock';
 import type { Db } from './connection';
 import { fromRow, toRow } from './rows';
@@ -41,6 +42,8 @@ export interface SignOff {
   at: string;
 }
 
+const SCORES_AT_ONCE = 500;
+
 const HEAD = [
   'id',
   'round_id',
@@ -70,25 +73,30 @@ export async function createEvaluation(
 export async function createEvaluatedMeasurands(
   connection: Db,
   evaluationId: number,
-  measurands: readonly EvaluatedMeasurand[],
+  measurands: Iterable<EvaluatedMeasurand>,
 ): Promise<void> {
-  await connection.batchInsert(
-    'evaluated_measurands',
-    measurands.map((entry) => ({ ...toRow(entry), evaluation_id: evaluationId })),
-    100,
-  );
+  for (const entry of measurands) {
+    await connection('evaluated_measurands').insert({ ...toRow(entry), evaluation_id: evaluationId });
+    // The text of one measurand can be a megabyte: others are served in between.
+    await setImmediate();
+  }
 }
 
 export async function createScores(
   connection: Db,
   evaluationId: number,
-  scores: readonly ScoreRow[],
+  scores: Iterable<ScoreRow>,
 ): Promise<void> {
-  await connection.batchInsert(
-    'scores',
-    scores.map((entry) => ({ ...toRow(entry), evaluation_id: evaluationId })),
-    500,
-  );
+  let chunk: object[] = [];
+  for (const entry of scores) {
+    chunk.push({ ...toRow(entry), evaluation_id: evaluationId });
+    if (chunk.length < SCORES_AT_ONCE) continue;
+    await connection('scores').insert(chunk);
+    chunk = [];
+    // There can be a hundred thousand of them.
+    await setImmediate();
+  }
+  if (chunk.length > 0) await connection('scores').insert(chunk);
 }
 
 export async function findEvaluatedMeasurand(

@@ -2,8 +2,15 @@ import 'server-only';
 
 export type Row = Record<string, unknown>;
 
+const camelKeys = new Map<string, string>();
+
+/** Columns are few and rows many, so each name is worked out once. */
 function camelKey(key: string): string {
-  return key.replace(/_([a-z0-9])/g, (_, letter: string) => letter.toUpperCase());
+  const known = camelKeys.get(key);
+  if (known !== undefined) return known;
+  const made = key.replace(/_([a-z0-9])/g, (_, letter: string) => letter.toUpperCase());
+  camelKeys.set(key, made);
+  return made;
 }
 
 function snakeKey(key: string): string {

@@ -1,118 +1,84 @@
 import 'server-only';
 import { addAuditEntry } from '@/db/audit-store';
-import { db, type Db } from '@/db/connection';
-import { listEnrolments } from '@/db/enrolment-store';
+import { databaseFile, db, type Db } from '@/db/connection';
 import {
   createEvaluatedMeasurands,
   createEvaluation,
   createScores,
   findLatestEvaluation,
-  type EvaluatedMeasurand,
-  type ScoreRow,
 } from '@/db/evaluation-store';
-import { listRoundMeasurands, type RoundMeasurand } from '@/db/round-measurand-store';
 import { inTransaction } from '@/db/transaction';
-import { listRoundResults, type RoundResult } from '@/db/views/round-results-view';
+import { listRoundSources } from '@/db/views/round-results-view';
+import { AppError } from '@/lib/errors';
+import { log } from '@/lib/log';
 import type { Actor } from '@/lib/rules/roles';
+import { LIBRARY_VERSION } from '@/lib/stats';
 import {
-  evaluateMeasurand,
-  LIBRARY_VERSION,
-  type EvaluateMeasurandInput,
-  type MeasurandEvaluation,
-} from '@/lib/stats';
-import { evaluationInput, hashText, inputsText } from './evaluation-inputs';
+  computeEvaluation,
+  hashSources,
+  measurandRows,
+  textOf,
+  type ComputedEvaluation,
+} from './compute-evaluation';
+import { evaluateInWorker, WorkerLost } from './evaluation-worker/evaluate-in-worker';
+import { unpackScores } from './packed-scores';
 import { applyStep, requireStep } from './round-steps';
 
-interface Evaluated {
-  plan: RoundMeasurand;
-  input: EvaluateMeasurandInput;
-  evaluation: MeasurandEvaluation;
-}
+/** A round with more results is evaluated in a thread of its own, so that the server goes on answering. */
+export const MANY_RESULTS = 20_000;
 
-function evaluateAll(plans: readonly RoundMeasurand[], results: readonly RoundResult[]): Evaluated[] {
-  return plans.map((plan) => {
-    const input = evaluationInput(
-      plan,
-      results.filter((result) => result.roundMeasurandId === plan.id),
-    );
-    return { plan, input, evaluation: evaluateMeasurand(input) };
-  });
-}
-
-function rowOf({ plan, evaluation }: Evaluated): EvaluatedMeasurand {
-  return {
-    roundMeasurandId: plan.id,
-    assignedValue: evaluation.assigned.value,
-    assignedUncertainty: evaluation.assigned.standardUncertainty,
-    sigmaPt: evaluation.sigmaPt.value,
-    scoreKind: evaluation.scoreKind,
-    scoredCount: evaluation.counts.scored,
-    bodyJson: JSON.stringify(evaluation),
-  };
-}
-
-function scoresOf({ plan, evaluation }: Evaluated, enrolmentIds: ReadonlyMap<string, number>): ScoreRow[] {
-  const enrolmentOf = (participant: string): number => {
-    const id = enrolmentIds.get(participant);
-    if (id === undefined) throw new Error(`participant ${participant} is not enrolled`);
-    return id;
-  };
-  const scored = evaluation.scores.map((entry) => ({
-    roundMeasurandId: plan.id,
-    enrolmentId: enrolmentOf(entry.participant),
-    value: entry.value,
-    score: entry.score,
-    signal: entry.score === null || entry.signal === null ? ('not-scored' as const) : entry.signal,
-  }));
-  const censored = evaluation.censored.map((entry) => ({
-    roundMeasurandId: plan.id,
-    enrolmentId: enrolmentOf(entry.participant),
-    value: null,
-    score: null,
-    signal: 'not-scored' as const,
-  }));
-  return [...scored, ...censored];
-}
-
-/** Computes every measurand of a round and keeps the whole as its next version, in the caller's transaction. */
+/** Keeps an evaluation of a round as its next version, in the caller's transaction; computes it when it is not given. */
 export async function keepEvaluation(
   trx: Db,
   roundId: number,
   by: { userId: number | null; at: string },
+  early: ComputedEvaluation | null = null,
 ): Promise<{ version: number; inputsSha256: string }> {
-  const plans = await listRoundMeasurands(trx, roundId);
-  const evaluated = evaluateAll(plans, await listRoundResults(trx, roundId));
-  const inputs = inputsText(evaluated.map(({ plan, input }) => ({ roundMeasurandId: plan.id, input })));
+  const computed = early ?? (await computeEvaluation(trx, roundId));
   const kept = {
     version: ((await findLatestEvaluation(trx, roundId))?.version ?? 0) + 1,
-    inputsSha256: hashText(inputs),
+    inputsSha256: computed.inputsSha256,
   };
   const evaluationId = await createEvaluation(trx, {
     ...kept,
     roundId,
     libraryVersion: LIBRARY_VERSION,
-    settingsJson: JSON.stringify(plans),
-    inputsJson: inputs,
+    settingsJson: computed.settingsJson,
+    inputsJson: textOf(computed.inputsJson),
     createdBy: by.userId,
     createdAt: by.at,
   });
-  const enrolments = await listEnrolments(trx, roundId);
-  const enrolmentIds = new Map(enrolments.map((enrolment) => [enrolment.participantCode, enrolment.id]));
-  await createEvaluatedMeasurands(trx, evaluationId, evaluated.map(rowOf));
-  await createScores(
-    trx,
-    evaluationId,
-    evaluated.flatMap((entry) => scoresOf(entry, enrolmentIds)),
-  );
+  await createEvaluatedMeasurands(trx, evaluationId, measurandRows(computed));
+  await createScores(trx, evaluationId, unpackScores(computed.scores));
   return kept;
 }
 
 /** Evaluates a closed round; the version that is kept never changes again. */
-export async function evaluateRound(actor: Actor, slug: string): Promise<{ version: number }> {
+export async function evaluateRound(
+  actor: Actor,
+  slug: string,
+  { manyResults = MANY_RESULTS, workerScript }: { manyResults?: number; workerScript?: string } = {},
+): Promise<{ version: number }> {
+  return keepEarly(actor, slug, await computeLargeRound(slug, manyResults, workerScript));
+}
+
+/** Keeps what was computed beforehand, unless its sources have changed; without it computes now. */
+export async function keepEarly(
+  actor: Actor,
+  slug: string,
+  early: ComputedEvaluation | null,
+): Promise<{ version: number }> {
   return inTransaction(db(), async (trx) => {
     const round = await requireStep(trx, slug, 'evaluate');
+    if (early && early.sourcesSha256 !== (await hashSources(trx, round.id))) {
+      throw new AppError(
+        'conflict',
+        'The results or the plan of this round changed while it was evaluated. Nothing was kept; evaluate it again.',
+      );
+    }
     const now = new Date().toISOString();
-    const { version, inputsSha256 } = await keepEvaluation(trx, round.id, { userId: actor.userId, at: now });
+    const by = { userId: actor.userId, at: now };
+    const { version, inputsSha256 } = await keepEvaluation(trx, round.id, by, early);
     await applyStep(trx, round, 'evaluate', { evaluatedAt: now });
     await addAuditEntry(trx, {
       userId: actor.userId,
@@ -122,4 +88,23 @@ export async function evaluateRound(actor: Actor, slug: string): Promise<{ versi
     });
     return { version };
   });
+}
+
+/** The evaluation of a large round from its own thread; null for others, and where there is no thread to be had. */
+async function computeLargeRound(
+  slug: string,
+  manyResults: number,
+  workerScript?: string,
+): Promise<ComputedEvaluation | null> {
+  const round = await requireStep(db(), slug, 'evaluate');
+  const sources = await listRoundSources(db(), round.id);
+  const count = sources.reduce((sum, { resultCount }) => sum + resultCount, 0);
+  if (count <= manyResults) return null;
+  try {
+    return await evaluateInWorker(databaseFile(), round.id, workerScript);
+  } catch (error) {
+    if (!(error instanceof WorkerLost)) throw error;
+    log.warn({ err: error, results: count }, 'evaluating in the main thread');
+    return null;
+  }
 }

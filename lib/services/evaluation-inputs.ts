@@ -1,7 +1,7 @@
 import 'server-only';
 import { createHash } from 'node:crypto';
 import type { RoundMeasurand } from '@/db/round-measurand-store';
-import type { RoundResult } from '@/db/views/round-results-view';
+import type { MeasuredResult } from '@/db/views/round-results-view';
 import { mean, type CensoredResult, type EvaluateMeasurandInput, type MeasurandResult } from '@/lib/stats';
 import { massFractionPerUnit } from '@/lib/units';
 
@@ -10,8 +10,8 @@ interface Figures {
   censored: CensoredResult[];
 }
 
-function groupByCode(results: readonly RoundResult[]): Map<string, RoundResult[]> {
-  const groups = new Map<string, RoundResult[]>();
+function groupByCode(results: readonly MeasuredResult[]): Map<string, MeasuredResult[]> {
+  const groups = new Map<string, MeasuredResult[]>();
   for (const result of results) {
     const group = groups.get(result.participantCode);
     if (group) group.push(result);
@@ -22,7 +22,7 @@ function groupByCode(results: readonly RoundResult[]): Map<string, RoundResult[]
 
 /** The largest standard uncertainty that was stated, with its expanded one as stated. */
 function statedUncertainty(
-  replicates: readonly RoundResult[],
+  replicates: readonly MeasuredResult[],
 ): Pick<MeasurandResult, 'standardUncertainty' | 'expandedUncertainty'> {
   let largest: { standardUncertainty: number | null; expandedUncertainty: number | null } = {
     standardUncertainty: null,
@@ -42,7 +42,7 @@ function statedUncertainty(
  * One figure for each participant: the mean of the replicates with the largest stated standard uncertainty. A
  * participant with a less-than or greater-than replicate has no number; the limit that says least is judged instead.
  */
-export function figuresOf(results: readonly RoundResult[]): Figures {
+export function figuresOf(results: readonly MeasuredResult[]): Figures {
   const figures: Figures = { results: [], censored: [] };
   for (const [participant, measured] of groupByCode(results)) {
     const replicates = measured.filter((result) => result.kind !== 'not-measured');
@@ -68,7 +68,7 @@ export function figuresOf(results: readonly RoundResult[]): Figures {
 /** What the library is told about one measurand: the plan's choices and the participants' figures. */
 export function evaluationInput(
   plan: RoundMeasurand,
-  results: readonly RoundResult[],
+  results: readonly MeasuredResult[],
 ): EvaluateMeasurandInput {
   return {
     ...figuresOf(results),

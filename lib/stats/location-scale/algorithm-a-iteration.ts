@@ -1,8 +1,15 @@
 import { lowerBound } from '../internal/sorted';
 import type { AlgorithmAIteration } from './algorithm-a';
 import type { AlgorithmAStart } from './algorithm-a-start';
-import { centre, winsoriseCentred, type Centred, type State, type Step } from './algorithm-a-step';
-import { WINSOR_MULTIPLE } from './winsorise';
+import {
+  ALGORITHM_A_SHAPE,
+  centre,
+  winsoriseCentred,
+  type Centred,
+  type State,
+  type Step,
+  type WinsorShape,
+} from './algorithm-a-step';
 
 export type AlgorithmATolerance = number | 'third-digit';
 
@@ -10,6 +17,8 @@ interface IterationSettings {
   readonly tolerance: AlgorithmATolerance;
   readonly maxIterations: number;
   readonly trace: boolean;
+  /** Default that of Algorithm A. */
+  readonly shape?: WinsorShape;
 }
 
 interface IterationEnd {
@@ -29,6 +38,7 @@ export function iterateAlgorithmA(
   start: AlgorithmAStart,
   settings: IterationSettings,
 ): IterationEnd {
+  const { shape = ALGORITHM_A_SHAPE } = settings;
   let data = centre(sorted, start.location, start.scale);
   const collapsed = COLLAPSE * start.scale;
   const trace: AlgorithmAIteration[] | null = settings.trace ? [] : null;
@@ -36,7 +46,7 @@ export function iterateAlgorithmA(
   let lastChange = NaN;
   for (let iteration = 1; iteration <= settings.maxIterations; iteration += 1) {
     const from = toData(start, data, state);
-    let next = winsoriseCentred(data, state);
+    let next = winsoriseCentred(data, state, shape);
     if (!Number.isFinite(next.scale)) {
       // s* has grown so far above its start that squares left the number range: go on in units of the present s*.
       const finer = data.unit;
@@ -44,12 +54,12 @@ export function iterateAlgorithmA(
       const ratio = data.unit / finer;
       state = { location: state.location * ratio, scale: state.scale * ratio };
       lastChange *= ratio;
-      next = winsoriseCentred(data, state);
+      next = winsoriseCentred(data, state, shape);
     }
     const to = toData(start, data, next);
-    trace?.push(traceRow(iteration, from, to, next));
+    trace?.push(traceRow({ iteration, from, to, step: next, multiple: shape.multiple }));
     if (next.scale === 0 || (next.tied && to.scale < collapsed)) {
-      const location = tiedValue(sorted, data, state);
+      const location = tiedValue(sorted, data, state, shape.multiple);
       return { location, scale: 0, iterations: iteration, converged: true, zeroScale: true, trace };
     }
     const change = Math.max(Math.abs(next.location - state.location), Math.abs(next.scale - state.scale));
@@ -69,8 +79,13 @@ function toData(start: AlgorithmAStart, { unit }: Centred, { location, scale }: 
   return { location: start.location + location / unit, scale: scale / unit };
 }
 
-function tiedValue(sorted: Float64Array, data: Centred, { location, scale }: State): number {
-  return sorted[lowerBound(data.z, location - WINSOR_MULTIPLE * scale)] as number;
+function tiedValue(
+  sorted: Float64Array,
+  data: Centred,
+  { location, scale }: State,
+  multiple: number,
+): number {
+  return sorted[lowerBound(data.z, location - multiple * scale)] as number;
 }
 
 /**
@@ -100,10 +115,18 @@ function roundedAt(value: number, place: number): number {
   return Math.round(value * 10 ** Math.min(300, -place) * 10 ** Math.max(0, -place - 300));
 }
 
-function traceRow(iteration: number, from: State, to: State, step: Step): AlgorithmAIteration {
+interface TraceRow {
+  readonly iteration: number;
+  readonly from: State;
+  readonly to: State;
+  readonly step: Step;
+  readonly multiple: number;
+}
+
+function traceRow({ iteration, from, to, step, multiple }: TraceRow): AlgorithmAIteration {
   // Kept finite for JSON; a limit at the end of the number range moves no value.
   const bounded = (x: number) => Math.min(Number.MAX_VALUE, Math.max(-Number.MAX_VALUE, x));
-  const delta = bounded(WINSOR_MULTIPLE * from.scale);
+  const delta = bounded(multiple * from.scale);
   return {
     iteration,
     location: from.location,

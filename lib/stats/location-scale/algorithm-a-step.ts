@@ -69,12 +69,24 @@ function accumulate(
   }
 }
 
-/** One step of the algorithm: pull the values outside x* +- 1.5 s* to these limits, then mean and 1.134 sd. */
-export function winsoriseCentred(data: Centred, { location, scale }: State): Step {
+/** How far out values stay as they are, and what makes up for the spread that winsorising takes away. */
+export interface WinsorShape {
+  readonly multiple: number;
+  readonly factor: number;
+}
+
+export const ALGORITHM_A_SHAPE: WinsorShape = { multiple: WINSOR_MULTIPLE, factor: WINSOR_SCALE_FACTOR };
+
+/** One step: pull the values outside x* +- 1.5 s* to these limits, then mean and 1.134 sd; or as `shape` has them. */
+export function winsoriseCentred(
+  data: Centred,
+  { location, scale }: State,
+  { multiple, factor }: WinsorShape = ALGORITHM_A_SHAPE,
+): Step {
   const { z, sum, squares } = data;
   const n = z.length;
-  const lower = location - WINSOR_MULTIPLE * scale;
-  const upper = location + WINSOR_MULTIPLE * scale;
+  const lower = location - multiple * scale;
+  const upper = location + multiple * scale;
   const low = lowerBound(z, lower);
   const high = upperBound(z, upper);
   const above = n - high;
@@ -85,7 +97,7 @@ export function winsoriseCentred(data: Centred, { location, scale }: State): Ste
   const tied = high > low && z[low] === z[high - 1];
   return {
     location: mean,
-    scale: WINSOR_SCALE_FACTOR * Math.sqrt(Math.max(0, total) / (n - 1)),
+    scale: factor * Math.sqrt(Math.max(0, total) / (n - 1)),
     below: low,
     above,
     tied,

@@ -1,4 +1,5 @@
 export * from './classify-uncertainty';
+export * from './combined-scores';
 export * from './difference';
 export * from './display-score';
 export * from './e-n-score';
@@ -9,4 +10,5 @@ export * from './percent-of-allowed';
 export * from './signal-of';
 export * from './z-prime-score';
 export * from './z-score';
+export * from './z-score-of-mean';
 export * from './zeta-score';

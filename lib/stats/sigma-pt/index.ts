@@ -1,6 +1,11 @@
+export * from './fit-sigma-function';
 export * from './hor-rat';
 export * from './horwitz-sigma';
 export * from './horwitz-thompson-sigma';
+export * from './limit-round-sigma';
 export * from './percent-sigma';
+export * from './pooled-sigma';
+export * from './precision-sigma';
 export * from './prescribed-sigma';
 export * from './robust-sigma';
+export { sigmaFromFunction, type SigmaFunction } from './sigma-function';

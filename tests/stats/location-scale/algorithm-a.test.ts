@@ -108,6 +108,13 @@ describe('algorithmA', () => {
     expect(codeOf(() => algorithmA([1]))).toBe('too-few-values');
   });
 
+  it('settles from a start two hundred orders of magnitude below its end', () => {
+    const far = [0, 0, 0, 0, 0, 0, -5e-324, -1.5635e-112, -1.5634e-112, 1.14e-112];
+    const found = algorithmA(far);
+    expect(found.startScale).toBe(5e-324);
+    expect(found.scale).toBeGreaterThan(5e-113);
+  });
+
   it('reports that it did not settle', () => {
     expect(codeOf(() => algorithmA([1, 2, 3, 50], { maxIterations: 2 }))).toBe('no-convergence');
   });

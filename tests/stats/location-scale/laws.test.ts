@@ -1,6 +1,21 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { algorithmA, madE, mean, median, nIqr, quantile, sd } from '@/lib/stats';
+import {
+  algorithmA,
+  hampel,
+  huberLocation,
+  huberProposal2,
+  madE,
+  mean,
+  median,
+  nIqr,
+  qMethod,
+  qn,
+  quantile,
+  sd,
+  sn,
+  trimmedMean,
+} from '@/lib/stats';
 import { expectClose } from '../expect-close';
 import { codeOf } from '../hostile';
 
@@ -9,12 +24,20 @@ const locations = {
   mean,
   'quantile 0.3': (values: readonly number[]) => quantile(values, 0.3),
   'x* of Algorithm A': (values: readonly number[]) => algorithmA(values).location,
+  'location of proposal 2': (values: readonly number[]) => huberProposal2(values).location,
+  huberLocation: (values: readonly number[]) => huberLocation(values).location,
+  'Q/Hampel': (values: readonly number[]) => hampel(values).location,
+  'trimmed mean': (values: readonly number[]) => trimmedMean(values).mean,
 };
 const scales = {
   madE,
   nIqr,
   sd,
   's* of Algorithm A': (values: readonly number[]) => algorithmA(values).scale,
+  'scale of proposal 2': (values: readonly number[]) => huberProposal2(values).scale,
+  's* of the Q method': (values: readonly number[]) => qMethod(values).scale,
+  qn: (values: readonly number[]) => qn(values),
+  sn: (values: readonly number[]) => sn(values),
 };
 
 /** Figures as laboratories report them: a few digits, ties happen. */

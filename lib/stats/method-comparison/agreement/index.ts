@@ -1,0 +1,15 @@
+export type { AllowedBias, BiasVerdict } from './allowed-bias';
+export * from './bias-at-level';
+export * from './bias-at-level-by-bootstrap';
+export * from './bland-altman';
+export * from './concordance';
+export * from './equivalence';
+export * from './kendall';
+export * from './outlying-pairs';
+export * from './paired-t';
+export type { DifferenceKind } from './pair-differences';
+export { pearson, type Correlation } from './pearson';
+export * from './reading-repeatability';
+export * from './regression-limits';
+export * from './replicate-agreement';
+export * from './spearman';

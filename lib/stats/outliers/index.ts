@@ -1,0 +1,18 @@
+export * from './cochran';
+export * from './cochran-critical';
+export * from './dixon';
+export { dixonCritical, dixonRatioFor, type DixonCriticalInput, type DixonRatioName } from './dixon-critical';
+export * from './dixon-probability';
+export * from './generalised-esd';
+export * from './grubbs-two-same-probability';
+export * from './grubbs-critical';
+export * from './grubbs-one';
+export * from './grubbs-two-opposite';
+export * from './grubbs-two-opposite-critical';
+export * from './grubbs-two-same';
+export * from './grubbs-two-same-critical';
+export * from './mandel';
+export * from './mandel-critical';
+export * from './outlier-screen';
+export type { CriticalPair, OutlierVerdict } from './verdict';
+export * from './tietjen-moore';

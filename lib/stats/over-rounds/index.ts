@@ -1,0 +1,10 @@
+export * from './cusum-chart';
+export * from './ewma-chart';
+export * from './laboratory-over-rounds';
+export * from './relation-to-group';
+export * from './relation-to-number';
+export * from './running-median';
+export { RUNS_RULES, type RunsRule, type RunsRuleId } from './runs-rules';
+export * from './shewhart-chart';
+export * from './zeta-against-z';
+export * from './lag-one-autocorrelation';

@@ -1,0 +1,49 @@
+import { align } from './table.mjs';
+
+/** The statistics as text: each function beside its peer and beside one sort. */
+export function describeStats(stats) {
+  if (stats.error) return [`statistics: failed: ${stats.error}`];
+  const header = [
+    'statistics',
+    'n',
+    'median ms',
+    'quartiles',
+    'in sorts',
+    'peer ms',
+    'times as fast',
+    'targets',
+  ];
+  const body = stats.rows.map((row) => {
+    const { own, peer } = row;
+    return [
+      row.name,
+      row.n.toLocaleString('en-GB'),
+      ms(own.median),
+      `${ms(own.low)} to ${ms(own.high)}`,
+      (own.median / row.sort).toFixed(1),
+      peer.spread ? ms(peer.spread.median) : '-',
+      peer.spread ? ratio(peer.spread.median / own.median) : '-',
+      ` ${[peer.name, ...row.targets.map(describeTarget), peer.missing].filter(Boolean).join('; ')}`,
+    ];
+  });
+  const judged = stats.rows.flatMap(({ targets }) => targets);
+  const count = (met) => judged.filter((target) => target.met === met).length;
+  return [
+    ...align([header, ...body], { wordsLast: true }),
+    `peers: ${stats.versions.r ?? 'R not usable'}; ${stats.versions.scipy ?? 'scipy not usable'}`,
+    `targets: ${count(true)} met, ${count(false)} not met, ${count(null)} not judged for want of the peer`,
+  ];
+}
+
+function describeTarget({ says, met }) {
+  const word = met === null ? 'not judged' : met ? 'met' : 'NOT MET';
+  return `${says}: ${word}`;
+}
+
+function ms(time) {
+  return time >= 100 ? time.toFixed(0) : time.toPrecision(3);
+}
+
+function ratio(value) {
+  return value >= 100 ? value.toFixed(0) : value.toPrecision(2);
+}
