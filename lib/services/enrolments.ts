@@ -14,7 +14,7 @@ import { inTransaction } from '@/db/transaction';
 import { AppError, notFound } from '@/lib/errors';
 import type { Actor } from '@/lib/rules/roles';
 import { roundStateWords } from '@/lib/rules/round-states';
-import { drawParticipantCode } from './participant-codes';
+import { drawParticipantCode, requireRoomFor } from './participant-codes';
 import { mailParticipants } from './round-mail';
 
 async function requireRoundTakingLabs(trx: Db, slug: string): Promise<Round> {
@@ -43,6 +43,7 @@ export async function enrolLaboratories(
     const present = await listEnrolments(trx, round.id);
     const taken = new Set(present.map((enrolment) => enrolment.participantCode));
     const enrolled = new Set(present.map((enrolment) => enrolment.laboratoryId));
+    requireRoomFor(new Set([...enrolled, ...known]).size);
     let added = 0;
     for (const laboratoryId of known) {
       if (enrolled.has(laboratoryId)) continue;

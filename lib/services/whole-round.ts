@@ -11,7 +11,7 @@ import { readResultsFile, type CheckedResult, type ReadFile } from '@/lib/result
 import type { Actor } from '@/lib/rules/roles';
 import { roundStateWords } from '@/lib/rules/round-states';
 import type { UploadedFile } from '@/lib/upload-body';
-import { drawParticipantCode } from './participant-codes';
+import { drawParticipantCode, requireRoomFor } from './participant-codes';
 import { getResultsPlan } from './results-plan';
 import { keepSubmission, sha256Of } from './submit-results';
 import { todayAnywhere } from './today-anywhere';
@@ -41,6 +41,7 @@ export async function checkWholeRoundFile(slug: string, file: UploadedFile): Pro
   const report = readResultsFile(file.bytes, plan, { kind: 'whole-round', today: todayAnywhere() });
   await refuseOwnResults(db(), round, report);
   const laboratoryCount = groupByLaboratory(report.results).size;
+  requireRoomFor(laboratoryCount);
   return { report, laboratoryCount, resultCount: report.results.length };
 }
 

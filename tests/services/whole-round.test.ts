@@ -104,7 +104,7 @@ it('says how many laboratories a round can have', async () => {
   const many = Array.from({ length: 4_501 }, () => 10);
   await expect(loadResults(planned, many)).rejects.toMatchObject({
     code: 'conflict',
-    userMessage: expect.stringContaining('at most 4499 laboratories'),
+    userMessage: expect.stringContaining('at most 4500 laboratories, and this would make 4501'),
   });
   expect(await countRows(db, 'laboratories')).toBe(0);
 });
