@@ -109,7 +109,7 @@ test(
     };
     await page.goto(`/rounds/${slug}/evaluation`);
     await expectEstimates(page, expected);
-    await expectText(page, `${reference('atrazine-algA-u').toFixed(6)} ug/L`);
+    await expectText(page, `${reference('atrazine-algA-u').toFixed(6)} \u00b5g/L`);
     await expectScores(page, values, expected);
 
     const analyst = await makePerson(connection, 'analyst', laboratories[0]?.id ?? 0);
