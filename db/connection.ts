@@ -18,3 +18,8 @@ export function db(): Db {
 export function databaseFile(): string {
   return path.join(dataDirectory(), DATABASE_FILE);
 }
+
+/** A pool on a database file for a caller of its own, such as another thread, which destroys it when done. */
+export function openDatabase(file: string): Db {
+  return knex(knexConfig(file));
+}
