@@ -18,6 +18,7 @@ async function bench() {
   const isJson = process.argv.includes('--json');
   if (isJson) talkOn(process.stderr);
   await installPackages();
+  if (wantsOnlyStats()) return benchStatsAlone(isJson);
   if (!hasSeeds()) throw new Stop('There is no seeds/run.ts; the measurements need the demonstration.');
   // Loaded only now, since it needs the packages.
   const bareApp = await import('./bench/bare-app.mjs');
@@ -35,6 +36,25 @@ async function bench() {
     for (const server of servers) await server.stop();
     fs.rmSync(folder, { recursive: true, force: true });
   }
+}
+
+/** `--only stats` measures the statistics alone, which needs no build. */
+function wantsOnlyStats() {
+  const at = process.argv.findIndex((argument) => argument === '--only' || argument.startsWith('--only='));
+  if (at < 0) return false;
+  const what = process.argv[at].split('=')[1] ?? process.argv[at + 1];
+  if (what === 'stats') return true;
+  throw new Stop(`--only knows stats, found ${what ?? 'nothing'}.`);
+}
+
+async function benchStatsAlone(isJson) {
+  const stats = await measureStats();
+  const { describeStats } = await import('./bench/stats-table.mjs');
+  const text = isJson
+    ? JSON.stringify({ machine: await describeMachine(), stats }, null, 2)
+    : describeStats(stats);
+  process.stdout.write(`${text}\n`);
+  return sayFailures({ rows: [], firstLoad: [], signInToPage: {}, evaluation: {}, stats });
 }
 
 async function measureAll(folder, servers, { startBareApp }) {
@@ -66,6 +86,7 @@ async function measureAll(folder, servers, { startBareApp }) {
     signInToPage: await measureSignIn(app.baseUrl, cast.coordinator),
     firstLoad: await measureFirstLoad(app.baseUrl, bare.baseUrl, plan),
     evaluation: await attempt(measureEvaluation),
+    stats: await measureStats(),
   };
 }
 
@@ -129,6 +150,22 @@ async function measureEvaluation() {
   return JSON.parse(stdout);
 }
 
+/** The functions of lib/stats beside their peers, and the evaluation of a large round. */
+async function measureStats() {
+  const ask = async (script, message, ...conditions) => {
+    const args = ['--import', 'tsx', ...conditions, script];
+    const { stdout } = await runOrStop(process.execPath, args, { message, cwd: ROOT });
+    return JSON.parse(stdout.slice(stdout.lastIndexOf('\n{') + 1));
+  };
+  sayStep('Measuring', 'the statistics beside R and scipy, about two minutes');
+  const functions = await attempt(() => ask('scripts/bench/stats.ts', 'The statistics could not be timed.'));
+  sayStep('Measuring', 'the evaluation of a large round');
+  const round = await attempt(() =>
+    ask('scripts/bench/stats-round.ts', 'The large round could not be timed.', '--conditions=react-server'),
+  );
+  return { functions, round };
+}
+
 /** A measurement that fails says so in its row and lets the others go on. */
 async function attempt(work) {
   try {
@@ -138,8 +175,9 @@ async function attempt(work) {
   }
 }
 
-function sayFailures({ rows, signInToPage, firstLoad, evaluation }) {
-  const failed = [...rows, ...firstLoad, signInToPage, evaluation].filter((row) => row.error).length;
+function sayFailures({ rows, signInToPage, firstLoad, evaluation, stats }) {
+  const all = [...rows, ...firstLoad, signInToPage, evaluation, stats.functions, stats.round];
+  const failed = all.filter((row) => row.error).length;
   if (failed > 0) say(`\n${failed} ${failed === 1 ? 'measurement' : 'measurements'} failed.`);
   return failed > 0 ? 1 : 0;
 }

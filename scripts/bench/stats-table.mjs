@@ -1,7 +1,11 @@
-import { align } from './table.mjs';
+import { align } from './align.mjs';
 
-/** The statistics as text: each function beside its peer and beside one sort. */
-export function describeStats(stats) {
+/** The statistics as text: each function beside its peer and beside one sort, and the evaluation of a large round. */
+export function describeStats({ functions, round }) {
+  return ['', ...describeFunctions(functions), '', ...describeRound(round)].join('\n');
+}
+
+function describeFunctions(stats) {
   if (stats.error) return [`statistics: failed: ${stats.error}`];
   const header = [
     'statistics',
@@ -32,6 +36,21 @@ export function describeStats(stats) {
     ...align([header, ...body], { wordsLast: true }),
     `peers: ${stats.versions.r ?? 'R not usable'}; ${stats.versions.scipy ?? 'scipy not usable'}`,
     `targets: ${count(true)} met, ${count(false)} not met, ${count(null)} not judged for want of the peer`,
+  ];
+}
+
+function describeRound(round) {
+  if (round.error) return [`evaluation of a large round: failed: ${round.error}`];
+  const { laboratories, measurands, replicates, evaluation, inWorker, withKeeping } = round;
+  const delay = ({ took, delayMedian, delayP99, delayMax }) =>
+    `${ms(took)} ms; event loop of the server held up ${ms(delayMedian)} ms (median), ${ms(delayP99)} ms (p99), ` +
+    `${ms(delayMax)} ms (most), of which 5 ms are the clock's`;
+  return [
+    `round of ${laboratories} laboratories x ${measurands} measurands x ${replicates} replicates, one core: ` +
+      `median ${ms(evaluation.median)} ms, quartiles ${ms(evaluation.low)} to ${ms(evaluation.high)} ms; ` +
+      describeTarget({ says: `under ${round.targetMs} ms`, met: round.met }),
+    `  in its thread, with reading: ${delay(inWorker)}`,
+    `  with keeping it: ${delay(withKeeping)}`,
   ];
 }
 

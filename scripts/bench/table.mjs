@@ -1,12 +1,16 @@
+import { align } from './align.mjs';
+import { describeStats } from './stats-table.mjs';
+
 const AIM = { share: 0.5, firstLoadKilobytes: 60 };
 
 /** The figures as text: one table of requests, one of scripts, and the single times. */
-export function describe({ machine, rows, signInToPage, firstLoad, evaluation }) {
+export function describe({ machine, rows, signInToPage, firstLoad, evaluation, stats }) {
   const lines = [
     `\n${machine.node}, ${machine.cpus} processors, ${machine.connections} connections, 4 s a row\n`,
   ];
   lines.push(...describeRows(rows), '', ...describeFirstLoad(firstLoad), '');
   lines.push(describeSignIn(signInToPage), ...describeEvaluation(evaluation));
+  lines.push(describeStats(stats));
   return lines.join('\n');
 }
 
@@ -50,15 +54,4 @@ function describeEvaluation(evaluation) {
   const line = (name, { median, p5, p95, runs }) =>
     `evaluation of 30 laboratories${name}: median ${median.toFixed(3)} ms, ${p5.toFixed(3)} to ${p95.toFixed(3)} ms in nine of ten (${runs} runs)`;
   return [line('', evaluation.plain), line(' with its working', evaluation.withWorking)];
-}
-
-/** Names to the left, figures to the right; a failure takes the rest of its line. */
-function align(rows) {
-  const full = rows.filter((row) => row.length === rows[0].length);
-  const widths = rows[0].map((_, column) => Math.max(...full.map((row) => row[column].length)));
-  widths[0] = Math.max(...rows.map((row) => row[0].length));
-  return rows.map(([name, ...cells]) => {
-    const right = cells.map((cell, i) => (cells.length === 1 ? cell : cell.padStart(widths[i + 1])));
-    return [name.padEnd(widths[0]), ...right].join('  ').trimEnd();
-  });
 }

@@ -28,6 +28,20 @@ describe('kernelDensity', () => {
     );
   });
 
+  it('agrees with it for many values in any order, with far ones and without', () => {
+    for (const n of [1_000, 4_999, 30_000]) {
+      for (const far of [0, 1e6]) {
+        const values = Array.from({ length: n }, (_, i) => 10 * Math.sin(i * i) + (i === 7 ? far : 0));
+        const { points, density } = kernelDensity(values, { bandwidth: 0.3, gridSize: 41 });
+        points.forEach((point, i) => {
+          expectClose(density[i] as number, plainDensity(values, 0.3, point), { atol: 1e-13 / 0.3 });
+        });
+        const turned = kernelDensity(values.toReversed(), { bandwidth: 0.3, gridSize: 41 }).density;
+        turned.forEach((height, i) => expectClose(height, density[i] as number, { atol: 1e-13 / 0.3 }));
+      }
+    }
+  });
+
   it('has area 1', () => {
     const { points, density } = kernelDensity([1, 2, 2.5, 9], { bandwidth: 0.7, gridSize: 2000 });
     const step = (points[1] as number) - (points[0] as number);

@@ -5,12 +5,18 @@ import type { OrderedPoints } from '../slopes/point-grid';
 import { SlopeRanks } from '../slopes/slope-ranks';
 import type { Bracket } from '../slopes/pivot-order';
 import { seededGenerator } from '../slopes/seeded-generator';
+import { DIRECT_POINTS, directRepeatedMedian } from './direct-repeated-median';
 
 const SEED = 19_820_242;
 const FEW = 24;
 
 /** The repeated median of the slopes, or null when all x are equal. */
 export function repeatedMedianSlope(points: OrderedPoints): number | null {
+  return points.count <= DIRECT_POINTS ? directRepeatedMedian(points) : searchedRepeatedMedian(points);
+}
+
+/** The same for many points, most of whose medians are never worked out. */
+export function searchedRepeatedMedian(points: OrderedPoints): number | null {
   const inner = new InnerMedians(points);
   const all = inner.withSlopes();
   if (all.length === 0) return null;

@@ -43,7 +43,8 @@ export interface RepeatedMedianLine {
  *   option or a result too large to represent
  *
  * Ties and equal values: pairs with equal x do not count. Order of input: does not matter for the line.
- * Numerics: random halving of the points by exact counts, expected O(n (log n)^2) time, O(n) memory.
+ * Numerics: up to 400 points by the definition; beyond, random halving of the points by exact counts, expected
+ *   O(n (log n)^2) time; O(n) memory.
  * Source: Siegel 1982, Biometrika 69, 242-244; counts: Matousek, Mount and Netanyahu 1998, Algorithmica 20, 136-150.
  * Checked by: tests/reference/method-comparison (sen1968), tests/stats/method-comparison/repeated-median.test.ts.
  * @example repeatedMedian([1, 2, 3, 4, 5], [1, 2, 3, 4, 50]) // => slope 1, intercept 0
